@@ -1,0 +1,128 @@
+using GlassPair.Optics.Requirements;
+using GlassPair.Optics.Spectrum;
+
+namespace GlassPair.Optics.Color;
+
+/// <summary>Powers of two thin elements, in contact or air-spaced, that bring a band to one focus.</summary>
+public static class ThinPair
+{
+    /// <summary>Solves the pair in the order in which light meets it.</summary>
+    public static ThinOutcome Solve(Requirement requirement, GlassIndices front, GlassIndices rear)
+    {
+        double space = requirement.AirSpace.GetValueOrDefault() / requirement.FocalLength;
+        double? power = requirement.Balance switch
+        {
+            ColorBalance.EndsUnited => EndsUnited(front.AbbeNumber, rear.AbbeNumber, space),
+            _ => BandBalanced(front, rear, requirement.Band, space),
+        };
+        if (power is not { } first || !(Math.Abs(first) <= ThinSolution.LargestPower))
+        {
+            return Explain(requirement, front, rear, space);
+        }
+
+        // Σ yᵢ φᵢ = Φ with y₂ = 1 − δ p₁
+        double second = (1.0 - first) / (1.0 - (space * first));
+        return new ThinSolution(requirement, [front, rear], [first, second]);
+    }
+
+    /// <summary>Gets the largest air space at which two Abbe numbers can be balanced, mm: f (1 − √(V₂/V₁))². Source: [air-spaced-achromat].</summary>
+    public static double LargestAirSpace(double focalLength, double frontAbbe, double rearAbbe)
+    {
+        double root = 1.0 - Math.Sqrt(rearAbbe / frontAbbe);
+        return focalLength * Math.Min(1.0, root * root);
+    }
+
+    /// <summary>p₁ of the classical achromat: the root of δ p² − (1 − V₂/V₁ + δ) p + 1 = 0 that goes over to V₁/(V₁ − V₂) in contact; null where none is real.</summary>
+    internal static double? EndsUnited(double frontAbbe, double rearAbbe, double space)
+    {
+        if (space == 0.0)
+        {
+            return frontAbbe == rearAbbe ? null : frontAbbe / (frontAbbe - rearAbbe);
+        }
+
+        double b = 1.0 - (rearAbbe / frontAbbe) + space;
+        double discriminant = (b * b) - (4.0 * space);
+        return discriminant >= 0.0 && b != 0.0 ? 2.0 / (b + Math.CopySign(Math.Sqrt(discriminant), b)) : null;
+    }
+
+    /// <summary>p₁ of least variance of p₁ t₁ + y₂² p₂ t₂ over the samples; null where there is no such minimum near the achromat.</summary>
+    internal static double? BandBalanced(GlassIndices front, GlassIndices rear, Band band, double space)
+    {
+        double frontMean = 0.0;
+        double rearMean = 0.0;
+        for (int i = 0; i < band.Samples.Length; i++)
+        {
+            frontMean += band.Samples[i].Weight * front.Changes[i];
+            rearMean += band.Samples[i].Weight * rear.Changes[i];
+        }
+
+        double g11 = 0.0;
+        double g12 = 0.0;
+        double g22 = 0.0;
+        double along = 0.0;
+        double gap = 0.0;
+        for (int i = 0; i < band.Samples.Length; i++)
+        {
+            double c1 = front.Changes[i] - frontMean;
+            double c2 = rear.Changes[i] - rearMean;
+            double difference = c2 - c1;
+            double weight = band.Samples[i].Weight;
+            g11 += weight * c1 * c1;
+            g12 += weight * c1 * c2;
+            g22 += weight * c2 * c2;
+            along += weight * c2 * difference;
+            gap += weight * difference * difference;
+        }
+
+        // p₁ = c₂·(c₂ − c₁)/|c₂ − c₁|²: equal to (G₂₂ − G₁₂)/(G₁₁ + G₂₂ − 2 G₁₂), without its cancellation
+        return space == 0.0
+            ? gap > 0.0 ? along / gap : null
+            : EndsUnited(front.AbbeNumber, rear.AbbeNumber, space) is { } start ? AirSpacedBalance(g11, g12, g22, space, start) : null;
+    }
+
+    /// <summary>The p that minimizes p² G₁₁ + 2 p h G₁₂ + h² G₂₂ with h = (1 − δ p)(1 − p), by Newton's method from the ends united.</summary>
+    private static double? AirSpacedBalance(double g11, double g12, double g22, double space, double start)
+    {
+        const int mostSteps = 60;
+        double p = start;
+        for (int step = 0; step < mostSteps; step++)
+        {
+            double h = (1.0 - (space * p)) * (1.0 - p);
+            double slope = (2.0 * space * p) - 1.0 - space;
+            double gradient = (p * g11) + ((h + (p * slope)) * g12) + (h * slope * g22);
+            double curvature = g11 + (((2.0 * slope) + (2.0 * space * p)) * g12) + (((slope * slope) + (2.0 * space * h)) * g22);
+            if (!(curvature > 0.0))
+            {
+                return null;
+            }
+
+            double next = p - (gradient / curvature);
+            if (!(Math.Abs(next) <= ThinSolution.LargestPower))
+            {
+                return null;
+            }
+
+            if (Math.Abs(next - p) <= 1e-15 * Math.Abs(p))
+            {
+                return next;
+            }
+
+            p = next;
+        }
+
+        return p;
+    }
+
+    private static NoThinSolution Explain(Requirement requirement, GlassIndices front, GlassIndices rear, double space)
+    {
+        double largest = LargestAirSpace(requirement.FocalLength, front.AbbeNumber, rear.AbbeNumber);
+        return space > 0.0 && requirement.AirSpace > largest * 0.999
+            ? new NoThinSolution(
+                NoThinSolutionReason.AirSpaceTooLarge,
+                FormattableString.Invariant($"{front.Glass.Id} and {rear.Glass.Id} cannot be balanced {requirement.AirSpace:0.###} mm apart: the largest air space for them is {largest:0.###} mm."),
+                largest)
+            : new NoThinSolution(
+                NoThinSolutionReason.DispersionsAlike,
+                $"{front.Glass.Id} and {rear.Glass.Id} disperse too much alike over this band: no finite powers balance them.");
+    }
+}

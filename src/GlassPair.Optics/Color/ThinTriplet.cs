@@ -1,0 +1,76 @@
+using GlassPair.Optics.Requirements;
+using GlassPair.Optics.Spectrum;
+
+namespace GlassPair.Optics.Color;
+
+/// <summary>Powers of three thin elements in contact that bring a band to one focus.</summary>
+public static class ThinTriplet
+{
+    /// <summary>Solves the triplet: the least variance over the band, or short end, design wavelength and long end united.</summary>
+    /// <exception cref="ArgumentException">The requirement asks for an air space.</exception>
+    public static ThinOutcome Solve(Requirement requirement, GlassIndices first, GlassIndices second, GlassIndices third)
+    {
+        if (requirement.AirSpace is > 0.0)
+        {
+            throw new ArgumentException("A thin triplet is solved in contact: leave the air space out.", nameof(requirement));
+        }
+
+        (double p2, double p3) = requirement.Balance == ColorBalance.EndsUnited
+            ? ThreeUnited(first, second, third)
+            : BandBalanced(first, second, third, requirement.Band);
+        double p1 = 1.0 - p2 - p3;
+        double largest = Math.Max(Math.Abs(p1), Math.Max(Math.Abs(p2), Math.Abs(p3)));
+        return largest <= ThinSolution.LargestPower
+            ? new ThinSolution(requirement, [first, second, third], [p1, p2, p3])
+            : new NoThinSolution(
+                NoThinSolutionReason.DispersionsAlike,
+                $"{first.Glass.Id}, {second.Glass.Id} and {third.Glass.Id} disperse too much alike over this band: no finite powers balance them.");
+    }
+
+    /// <summary>Σ pᵢ = 1 with Σ pᵢ tᵢ = 0 at the short and at the long end, by Cramer's rule on differences from the first glass.</summary>
+    private static (double Second, double Third) ThreeUnited(GlassIndices a, GlassIndices b, GlassIndices c)
+    {
+        (double bs, double cs) = (b.ShortChange - a.ShortChange, c.ShortChange - a.ShortChange);
+        (double bl, double cl) = (b.LongChange - a.LongChange, c.LongChange - a.LongChange);
+        double determinant = (bs * cl) - (cs * bl);
+        return (((cs * a.LongChange) - (cl * a.ShortChange)) / determinant, ((bl * a.ShortChange) - (bs * a.LongChange)) / determinant);
+    }
+
+    /// <summary>Least squares of c₁ + p₂ (c₂ − c₁) + p₃ (c₃ − c₁) by orthogonalization, c the weighted deviations of t from their mean.</summary>
+    private static (double Second, double Third) BandBalanced(GlassIndices a, GlassIndices b, GlassIndices c, Band band)
+    {
+        double[] target = Deviations(a, band);
+        double[] u = Subtract(Deviations(b, band), target);
+        double[] v = Subtract(Deviations(c, band), target);
+        double uu = Dot(u, u);
+        double projection = Dot(u, v) / uu;
+        double[] w = [.. v.Select((value, i) => value - (projection * u[i]))];
+        double third = -Dot(w, target) / Dot(w, w);
+        double second = -(Dot(u, target) / uu) - (third * projection);
+        return (second, third);
+    }
+
+    private static double[] Deviations(GlassIndices glass, Band band)
+    {
+        double mean = 0.0;
+        for (int i = 0; i < band.Samples.Length; i++)
+        {
+            mean += band.Samples[i].Weight * glass.Changes[i];
+        }
+
+        return [.. band.Samples.Select((s, i) => Math.Sqrt(s.Weight) * (glass.Changes[i] - mean))];
+    }
+
+    private static double[] Subtract(double[] left, double[] right) => [.. left.Select((value, i) => value - right[i])];
+
+    private static double Dot(double[] left, double[] right)
+    {
+        double sum = 0.0;
+        for (int i = 0; i < left.Length; i++)
+        {
+            sum += left[i] * right[i];
+        }
+
+        return sum;
+    }
+}

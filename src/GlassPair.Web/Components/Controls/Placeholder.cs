@@ -1,0 +1,2 @@
+namespace GlassPair.Web.Components.Controls;
+internal static class Placeholder;

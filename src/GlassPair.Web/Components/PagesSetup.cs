@@ -1,0 +1,19 @@
+namespace GlassPair.Web.Components;
+
+/// <summary>Registers and maps the pages.</summary>
+public static class PagesSetup
+{
+    /// <summary>Adds what the pages need.</summary>
+    public static IServiceCollection AddGlassPairPages(this IServiceCollection services, IConfiguration configuration)
+    {
+        services.AddRazorComponents().AddInteractiveServerComponents();
+        return services;
+    }
+
+    /// <summary>Maps the pages.</summary>
+    public static WebApplication MapGlassPairPages(this WebApplication app)
+    {
+        app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
+        return app;
+    }
+}

@@ -1,0 +1,30 @@
+using GlassPair.Web.Api;
+using GlassPair.Web.Components;
+using GlassPair.Web.Stocks;
+using GlassPair.Web.Work;
+
+// Published output has its own wwwroot beside the dll; a build output has not, and needs the
+// static-web-assets manifest, which the host loads by itself only in Development.
+bool isPublished = Directory.Exists(Path.Combine(AppContext.BaseDirectory, "wwwroot"));
+WebApplicationBuilder builder = WebApplication.CreateBuilder(new WebApplicationOptions
+{
+    Args = args,
+    ContentRootPath = isPublished ? AppContext.BaseDirectory : null,
+});
+if (!isPublished)
+{
+    builder.WebHost.UseStaticWebAssets();
+}
+
+builder.Services.AddGlassPairStocks(builder.Configuration);
+builder.Services.AddGlassPairWork(builder.Configuration);
+builder.Services.AddGlassPairApi(builder.Configuration);
+builder.Services.AddGlassPairPages(builder.Configuration);
+
+WebApplication app = builder.Build();
+app.UseGlassPairApi();
+app.UseAntiforgery();
+app.MapStaticAssets();
+app.MapGlassPairApi();
+app.MapGlassPairPages();
+app.Run();

@@ -1,0 +1,41 @@
+using System.Collections.Concurrent;
+using System.Diagnostics;
+using GlassPair.Catalogue;
+using GlassPair.Optics.Rankings;
+using GlassPair.Optics.Spectrum;
+
+namespace GlassPair.Web.Work;
+
+/// <summary>A shortlist, and how long it took.</summary>
+/// <param name="Stock">The stock it was made from.</param>
+/// <param name="Shortlist">The ranked candidates.</param>
+/// <param name="Elapsed">The time from the call to the answer.</param>
+public sealed record ShortlistAnswer(Stock Stock, Shortlist Shortlist, TimeSpan Elapsed);
+
+/// <summary>Ranks for pages and API alike. One instance for the whole process; safe to use from any thread.</summary>
+public sealed class ShortlistService
+{
+    private const int MostTables = 32;
+    private readonly ConcurrentDictionary<(string Stock, Band Band), IndexTable> _tables = new();
+
+    /// <summary>Gets the indices of a stock over a band; the last few are kept.</summary>
+    public IndexTable TableOf(Stock stock, Band band)
+    {
+        if (_tables.Count >= MostTables)
+        {
+            _tables.Clear();
+        }
+
+        return _tables.GetOrAdd((stock.Id, band), _ => IndexTable.Of(stock.Glasses, band));
+    }
+
+    /// <summary>Ranks the pairs of a stock.</summary>
+    public Task<ShortlistAnswer> RankAsync(Stock stock, ShortlistRequest request, CancellationToken cancellation) => Task.Run(
+        () =>
+        {
+            long start = Stopwatch.GetTimestamp();
+            Shortlist shortlist = PairRanking.Rank(TableOf(stock, request.Requirement.Band), request, cancellation);
+            return new ShortlistAnswer(stock, shortlist, Stopwatch.GetElapsedTime(start));
+        },
+        cancellation);
+}
