@@ -49,6 +49,13 @@ public sealed record GlassLimits
             : !AllowMolding && glass.Process is not null ? GlassDropReason.Molding
             : null;
     }
+
+    /// <summary>Tells why two glasses that may be used may not be used together; null where they may.</summary>
+    public PairDropReason? ReasonAgainst(Glass a, Glass b) =>
+        ExpansionDifference is not { } most ? null
+        : a.ExpansionPerKelvin is not { } first || b.ExpansionPerKelvin is not { } second ? PairDropReason.ExpansionUnknown
+        : Math.Abs(first - second) > most ? PairDropReason.ExpansionDifference
+        : null;
 }
 
 /// <summary>Why a glass was not considered.</summary>

@@ -57,7 +57,7 @@ public static class PairRanking
                     continue;
                 }
 
-                if (ReasonAgainst(limits, distinct[i].Glass, distinct[j].Glass) is { } reason)
+                if (limits.ReasonAgainst(distinct[i].Glass, distinct[j].Glass) is { } reason)
                 {
                     Drop(reason);
                     continue;
@@ -131,10 +131,4 @@ public static class PairRanking
 
     private static double TwelveDigits(double value) =>
         double.Parse(value.ToString("E11", CultureInfo.InvariantCulture), CultureInfo.InvariantCulture);
-
-    private static PairDropReason? ReasonAgainst(GlassLimits limits, Glass a, Glass b) =>
-        limits.ExpansionDifference is not { } most ? null
-        : a.ExpansionPerKelvin is not { } first || b.ExpansionPerKelvin is not { } second ? PairDropReason.ExpansionUnknown
-        : Math.Abs(first - second) > most ? PairDropReason.ExpansionDifference
-        : null;
 }
