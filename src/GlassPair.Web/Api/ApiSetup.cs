@@ -1,5 +1,7 @@
+using System.Globalization;
 using System.Text.Json;
 using System.Text.Json.Serialization;
+using GlassPair.Web.Work;
 
 namespace GlassPair.Web.Api;
 
@@ -21,9 +23,14 @@ public static class ApiSetup
         services.AddProblemDetails(options => options.CustomizeProblemDetails = context =>
         {
             context.ProblemDetails.Extensions["traceId"] = context.HttpContext.TraceIdentifier;
-            if (context.Exception is BadHttpRequestException bad)
+            if (context.Exception is BadHttpRequestException or ServerBusyException)
             {
-                context.ProblemDetails.Detail = bad.Message;
+                context.ProblemDetails.Detail = context.Exception.Message;
+            }
+
+            if (context.Exception is ServerBusyException busy)
+            {
+                context.HttpContext.Response.Headers.RetryAfter = busy.RetryAfter.TotalSeconds.ToString("0", CultureInfo.InvariantCulture);
             }
         });
         return services;
@@ -36,8 +43,8 @@ public static class ApiSetup
         {
             api.UseExceptionHandler(new ExceptionHandlerOptions
             {
-                StatusCodeSelector = problem => problem is BadHttpRequestException bad ? bad.StatusCode : StatusCodes.Status500InternalServerError,
-                SuppressDiagnosticsCallback = context => context.Exception is BadHttpRequestException,
+                StatusCodeSelector = StatusOf,
+                SuppressDiagnosticsCallback = context => StatusOf(context.Exception) != StatusCodes.Status500InternalServerError,
             });
             api.UseStatusCodePages();
         });
@@ -49,14 +56,32 @@ public static class ApiSetup
     {
         RouteGroupBuilder api = app.MapGroup($"{Root}/v1");
         RouteGroupBuilder glasses = api.MapGroup("").WithTags("Glasses");
-        glasses.MapGet("stocks", GlassEndpoints.ListStocks);
-        glasses.MapGet("glasses", GlassEndpoints.ListGlasses);
-        glasses.MapGet("glasses/{maker}/{name}", GlassEndpoints.ShowGlass);
-        glasses.MapGet("glasses/{maker}/{name}/index", GlassEndpoints.ShowIndex);
+        Only(HttpMethods.Get, glasses, "stocks", GlassEndpoints.ListStocks);
+        Only(HttpMethods.Get, glasses, "glasses", GlassEndpoints.ListGlasses);
+        Only(HttpMethods.Get, glasses, "glasses/{maker}/{name}", GlassEndpoints.ShowGlass);
+        Only(HttpMethods.Get, glasses, "glasses/{maker}/{name}/index", GlassEndpoints.ShowIndex);
         RouteGroupBuilder solutions = api.MapGroup("").WithTags("Solutions");
-        solutions.MapPost("pair", SolutionEndpoints.SolvePair);
-        solutions.MapPost("triplet", SolutionEndpoints.SolveTriplet);
-        solutions.MapPost("shortlist", ShortlistEndpoint.Rank);
+        Only(HttpMethods.Post, solutions, "pair", SolutionEndpoints.SolvePair);
+        Only(HttpMethods.Post, solutions, "triplet", SolutionEndpoints.SolveTriplet);
+        Only(HttpMethods.Post, solutions, "shortlist", ShortlistEndpoint.Rank);
         return app;
     }
+
+    /// <summary>Maps a route for one method; the others get 405 with words, also where a fallback route would catch them.</summary>
+    private static void Only(string method, RouteGroupBuilder group, string pattern, Delegate handler)
+    {
+        group.MapMethods(pattern, [method], handler);
+        group.Map(pattern, (HttpResponse response) =>
+        {
+            response.Headers.Allow = method;
+            return TypedResults.Problem(detail: $"Use {method} here.", statusCode: StatusCodes.Status405MethodNotAllowed);
+        }).ExcludeFromDescription();
+    }
+
+    private static int StatusOf(Exception problem) => problem switch
+    {
+        BadHttpRequestException bad => bad.StatusCode,
+        ServerBusyException => StatusCodes.Status503ServiceUnavailable,
+        _ => StatusCodes.Status500InternalServerError,
+    };
 }

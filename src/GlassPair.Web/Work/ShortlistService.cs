@@ -13,7 +13,8 @@ namespace GlassPair.Web.Work;
 public sealed record ShortlistAnswer(Stock Stock, Shortlist Shortlist, TimeSpan Elapsed);
 
 /// <summary>Ranks for pages and API alike. One instance for the whole process; safe to use from any thread.</summary>
-public sealed class ShortlistService
+/// <param name="gate">The gate for heavy work.</param>
+public sealed class ShortlistService(WorkGate gate)
 {
     private const int MostTables = 32;
     private readonly ConcurrentDictionary<(string Stock, Band Band), IndexTable> _tables = new();
@@ -30,11 +31,13 @@ public sealed class ShortlistService
     }
 
     /// <summary>Ranks the pairs of a stock.</summary>
-    public Task<ShortlistAnswer> RankAsync(Stock stock, ShortlistRequest request, CancellationToken cancellation) => Task.Run(
-        () =>
+    /// <exception cref="ServerBusyException">Too much is waiting, or the work ran too long; the message is a sentence for the user.</exception>
+    /// <exception cref="OperationCanceledException">The caller ended it.</exception>
+    public Task<ShortlistAnswer> RankAsync(Stock stock, ShortlistRequest request, CancellationToken cancellation) => gate.RunAsync(
+        stop =>
         {
             long start = Stopwatch.GetTimestamp();
-            Shortlist shortlist = PairRanking.Rank(TableOf(stock, request.Requirement.Band), request, cancellation);
+            Shortlist shortlist = PairRanking.Rank(TableOf(stock, request.Requirement.Band), request, stop);
             return new ShortlistAnswer(stock, shortlist, Stopwatch.GetElapsedTime(start));
         },
         cancellation);
