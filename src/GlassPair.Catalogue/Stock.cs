@@ -1,3 +1,4 @@
+using System.Collections.Frozen;
 using System.Collections.Immutable;
 using System.Diagnostics.CodeAnalysis;
 using GlassPair.Optics.Glasses;
@@ -7,13 +8,15 @@ namespace GlassPair.Catalogue;
 /// <summary>A set of glasses with their supply columns, read from one catalogue. Immutable.</summary>
 public sealed class Stock
 {
-    private readonly Dictionary<string, Glass> _byId;
+    private readonly FrozenDictionary<string, Glass> _byKey;
+    private readonly ILookup<string, GlassRemark> _remarks;
 
-    internal Stock(string id, string title, IEnumerable<Glass> glasses, ImmutableArray<GlassRemark> remarks)
+    internal Stock(string id, string title, IEnumerable<Glass> glasses, ImmutableArray<GlassRemark> remarks, ImmutableArray<CatalogueFile> files)
     {
-        (Id, Title, Remarks) = (id, title, remarks);
+        (Id, Title, Remarks, Files) = (id, title, remarks, files);
         Glasses = [.. glasses.OrderBy(g => g.Id, StringComparer.Ordinal)];
-        _byId = Glasses.ToDictionary(g => g.Id, StringComparer.OrdinalIgnoreCase);
+        _byKey = Glasses.ToFrozenDictionary(g => GlassKey.Of(g.Id), StringComparer.Ordinal);
+        _remarks = remarks.ToLookup(r => r.GlassId, StringComparer.Ordinal);
     }
 
     /// <summary>Gets the first 12 hexadecimal digits of the SHA-256 hash of the content.</summary>
@@ -28,11 +31,12 @@ public sealed class Stock
     /// <summary>Gets what the reader noticed about single glasses, such as stated values that disagree with the formula.</summary>
     public ImmutableArray<GlassRemark> Remarks { get; }
 
-    /// <summary>Finds a glass by <c>maker/name</c>, upper and lower case alike.</summary>
-    public bool TryFind(string id, [NotNullWhen(true)] out Glass? glass) => _byId.TryGetValue(id, out glass);
-}
+    /// <summary>Gets the files that the stock was read from, in ordinal order of their names.</summary>
+    public ImmutableArray<CatalogueFile> Files { get; }
 
-/// <summary>Something that the reader noticed about a glass.</summary>
-/// <param name="GlassId">The glass, <c>maker/name</c>.</param>
-/// <param name="Message">What, in words, with both values where two disagree.</param>
-public sealed record GlassRemark(string GlassId, string Message);
+    /// <summary>Finds a glass by <c>maker/name</c>; upper and lower case, spaces and the kind of dash do not count.</summary>
+    public bool TryFind(string id, [NotNullWhen(true)] out Glass? glass) => _byKey.TryGetValue(GlassKey.Of(id), out glass);
+
+    /// <summary>Gets what the reader noticed about one glass.</summary>
+    public IEnumerable<GlassRemark> RemarksOn(Glass glass) => _remarks[glass.Id];
+}

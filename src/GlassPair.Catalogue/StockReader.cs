@@ -1,44 +1,109 @@
 using System.Collections.Immutable;
-using System.Globalization;
-using System.Security.Cryptography;
-using CsvHelper;
 using GlassPair.Optics.Glasses;
-using GlassPair.Optics.Spectrum;
 
 namespace GlassPair.Catalogue;
 
-/// <summary>Reads a catalogue of CSV files.</summary>
+/// <summary>Reads a catalogue of CSV files in the format of <see cref="CatalogueFormat"/>. What is in the files never makes it throw.</summary>
 public static class StockReader
 {
-    /// <summary>Reads every CSV file of a folder as one stock.</summary>
+    /// <summary>Reads every CSV file of a folder as one stock. A folder or file that cannot be read is an issue.</summary>
     public static StockReading ReadFolder(string folder, string title)
     {
-        List<Glass> glasses = [];
-        using var hash = IncrementalHash.CreateHash(HashAlgorithmName.SHA256);
-        foreach (string file in Directory.GetFiles(folder, "*.csv").Order(StringComparer.Ordinal))
+        var issues = new IssueList();
+        List<CatalogueFile> files = [];
+        try
         {
-            hash.AppendData(File.ReadAllBytes(file));
-            using CsvReader reader = CsvReader.FromFile(file);
-            reader.ReadHeader();
-            while (reader.Read())
+            foreach (string path in CatalogueFolder.Paths(folder).Take(CatalogueFolder.MostFiles + 1))
             {
-                if (reader.GetString("form") == "measured") continue;
-                double Number(string column) => double.Parse(reader.GetString(column), CultureInfo.InvariantCulture);
-                bool Has(string column) => reader.TryGetFieldIndex(column, out int index) && reader.GetString(index).Length > 0;
-                DispersionFormula formula = reader.GetString("form") == "sellmeier"
-                    ? new SellmeierFormula(Enumerable.Range(1, 6).Where(i => Has($"b{i}")).Select(i => new SellmeierTerm(Number($"b{i}"), Number($"c{i}_um2"))))
-                    : new PowerSeriesFormula(Number("a_0"), PowerSeriesFormula.Exponents.Select(e => (e, Name: e < 0 ? $"a_minus_{-e}" : $"a_{e}")).Where(t => Has(t.Name)).Select(t => new PowerTerm(t.e, Number(t.Name))));
-                glasses.Add(new Glass(reader.GetString("maker"), reader.GetString("name"), formula, WavelengthRange.FromNanometers(Number("range_from_nm"), Number("range_to_nm")))
+                try
                 {
-                    ContainsLead = Has("contains_lead"),
-                    Supply = Enum.Parse<Supply>(reader.GetString("supply").Replace(" ", "", StringComparison.Ordinal), ignoreCase: true),
-                    ExpansionPerKelvin = Has("expansion_minus30_to_70_per_k") ? Number("expansion_minus30_to_70_per_k") : null,
-                    Process = reader.GetString("process") is { Length: > 0 } p ? p : null,
-                    Edition = reader.GetString("edition"),
-                });
+                    using FileStream content = File.OpenRead(path);
+                    files.Add(CatalogueFile.FromStream(Path.GetFileName(path), content));
+                }
+                catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+                {
+                    issues.Error(Path.GetFileName(path), 0, "The file cannot be read; is it open in another program, and may the server read it?");
+                }
+            }
+        }
+        catch (Exception e) when (e is IOException or UnauthorizedAccessException)
+        {
+            issues.Error("", 0, "The catalogue's folder does not exist or cannot be read.");
+        }
+
+        if (files.Count == 0 && issues.Errors == 0)
+        {
+            issues.Error("", 0, "The catalogue's folder has no CSV file.");
+        }
+
+        return Read(files, title, issues);
+    }
+
+    /// <summary>Reads one file as a stock.</summary>
+    /// <exception cref="IOException">The stream cannot be read.</exception>
+    public static StockReading ReadFile(string name, Stream content, string title) => Read([CatalogueFile.FromStream(name, content)], title);
+
+    /// <summary>Reads files as one stock.</summary>
+    public static StockReading Read(IEnumerable<CatalogueFile> files, string title) => Read([.. files], title, new IssueList());
+
+    private static StockReading Read(List<CatalogueFile> files, string title, IssueList issues)
+    {
+        if (files.Count > CatalogueFolder.MostFiles)
+        {
+            issues.Error("", 0, $"More than {CatalogueFolder.MostFiles} files, the limit.");
+            return ReadingOf(null, issues);
+        }
+
+        files.Sort((a, b) => string.CompareOrdinal(a.Name, b.Name));
+        List<GlassRow> rows = [];
+        var firstOf = new Dictionary<string, CsvRow>(StringComparer.Ordinal);
+        foreach (CatalogueFile file in files)
+        {
+            if (CsvText.TryOpen(file, issues) is not { } text
+                || CsvTable.TryRead(text, CatalogueFormat.Names, CatalogueFormat.Required, issues) is not { } table)
+            {
+                continue;
+            }
+
+            foreach (CsvRow row in table.Rows)
+            {
+                if (GlassRow.TryRead(row) is not { } read)
+                {
+                    continue;
+                }
+
+                if (firstOf.TryGetValue(GlassKey.Of(read.Glass.Id), out CsvRow? first))
+                {
+                    row.Error(
+                        FormattableString.Invariant($"The glass stands in {first.File}, line {first.Line}, too: upper and lower case, spaces and the kind of dash do not count. Take one row away."),
+                        CatalogueFormat.Name);
+                }
+                else
+                {
+                    firstOf.Add(GlassKey.Of(read.Glass.Id), row);
+                    rows.Add(read);
+                }
             }
         }
 
-        return new StockReading(new Stock(Convert.ToHexStringLower(hash.GetHashAndReset())[..12], title, glasses, []), ImmutableArray<StockIssue>.Empty);
+        if (rows.Count > CsvTable.MostRows)
+        {
+            issues.Error("", 0, $"More than {CsvTable.MostRows:N0} glasses, the limit.");
+        }
+
+        return ReadingOf(issues.Errors == 0 ? StockOf(rows, files, title) : null, issues);
     }
+
+    private static Stock StockOf(List<GlassRow> rows, IReadOnlyList<CatalogueFile> files, string title)
+    {
+        IEnumerable<Glass> glasses = rows.Select(r => r.Glass);
+        ImmutableArray<GlassRemark> remarks =
+        [
+            .. rows.SelectMany(r => GlassRemarks.On(r).Select(message => new GlassRemark(r.Glass.Id, message))),
+            .. MakerNormalLine.RemarksOn(glasses),
+        ];
+        return new Stock(StockId.Of(files), title, glasses, remarks, [.. files]);
+    }
+
+    private static StockReading ReadingOf(Stock? stock, IssueList issues) => new(stock, issues.Listed) { FurtherIssues = issues.Further };
 }
