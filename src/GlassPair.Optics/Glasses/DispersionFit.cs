@@ -10,22 +10,22 @@ public readonly record struct MeasuredIndex(Wavelength Wavelength, double Index)
 
 /// <summary>A measured index that a fit left out, and why.</summary>
 /// <param name="Measured">The value as given.</param>
-/// <param name="Residual">Measured minus fitted index.</param>
+/// <param name="Residual">Measured index minus that of the formula fitted to the others.</param>
 /// <param name="Reason">Why it was left out, in words.</param>
 public sealed record LeftOutIndex(MeasuredIndex Measured, double Residual, string Reason);
 
-/// <summary>A dispersion formula fitted to measured indices, and how well it fits.</summary>
+/// <summary>A dispersion formula fitted to measured indices, and how well it fits. Made by <see cref="DispersionFitter"/>.</summary>
 /// <param name="Formula">The fitted formula.</param>
 /// <param name="Measured">The indices that the formula was fitted to, in rising wavelength.</param>
 /// <param name="Residuals">Measured minus fitted index, one for each of <paramref name="Measured"/>.</param>
-/// <param name="LeftOut">Indices left out, with the reason.</param>
+/// <param name="LeftOut">Indices left out, in rising wavelength, with the reason.</param>
 /// <param name="Warnings">What a user should know before trusting the fit, in words.</param>
 public sealed record DispersionFit(
     DispersionFormula Formula,
     ImmutableArray<MeasuredIndex> Measured,
     ImmutableArray<double> Residuals,
     ImmutableArray<LeftOutIndex> LeftOut,
-    ImmutableArray<string> Warnings)
+    ImmutableArray<string> Warnings) : FitOutcome
 {
     /// <summary>Gets the wavelengths for which the fit holds: those it was made from.</summary>
     public WavelengthRange Range => new(Measured[0].Wavelength, Measured[^1].Wavelength);
