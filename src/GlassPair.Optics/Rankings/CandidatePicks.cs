@@ -1,0 +1,49 @@
+using GlassPair.Optics.Color;
+
+namespace GlassPair.Optics.Rankings;
+
+/// <summary>Picks the candidates of a request in the order of the ranking, none of its glasses more often than it allows.</summary>
+internal sealed class CandidatePicks(ShortlistRequest request)
+{
+    // Of the best candidates many share a glass.
+    private const int PoolPerPick = 16;
+    private readonly Dictionary<GlassIndices, int> _uses = [];
+
+    /// <summary>Gets the picks, best first.</summary>
+    public List<ThinSolution> Solutions { get; } = [];
+
+    /// <summary>Gets how many candidates to look at in one go.</summary>
+    public int PoolSize => request.PairsPerGlass is null ? request.Take : PoolPerPick * request.Take;
+
+    /// <summary>Tells whether a glass may stand in a further candidate.</summary>
+    public bool MayUse(GlassIndices glass) => request.PairsPerGlass is not { } most || _uses.GetValueOrDefault(glass) < most;
+
+    /// <summary>Picks from a pool.</summary>
+    /// <returns>Whether all that were asked for are picked.</returns>
+    public bool TakeFrom(CandidatePool pool, Func<Combination, ThinOutcome> solve)
+    {
+        foreach (ArraySegment<Combination> group in pool.Groups())
+        {
+            IEnumerable<ThinSolution> solutions = group.Select(solve).Cast<ThinSolution>();
+            foreach (ThinSolution solution in group.Count == 1 ? solutions : RankingOrder.OfTied(solutions))
+            {
+                if (Solutions.Count == request.Take)
+                {
+                    return true;
+                }
+
+                if (solution.Elements.All(MayUse))
+                {
+                    foreach (GlassIndices element in solution.Elements)
+                    {
+                        _uses[element] = _uses.GetValueOrDefault(element) + 1;
+                    }
+
+                    Solutions.Add(solution);
+                }
+            }
+        }
+
+        return Solutions.Count == request.Take;
+    }
+}

@@ -1,0 +1,102 @@
+using GlassPair.Optics.Color;
+using GlassPair.Optics.Requirements;
+
+namespace GlassPair.Optics.Rankings;
+
+/// <summary>Glasses as columns of numbers, by falling Abbe number, for the kernel that solves one glass with all that follow it.</summary>
+/// <remarks>
+/// By this order the first glass of a pair is always the front one. Behind the last glass its numbers are repeated, so that a vector
+/// may read past the end.
+/// </remarks>
+internal sealed class PairColumns
+{
+    private const int Padding = 8;
+
+    public PairColumns(Requirement requirement, DataQuality quality, IEnumerable<GlassIndices> glasses)
+    {
+        Requirement = requirement;
+        Glasses = [.. glasses.OrderByDescending(g => g.AbbeNumber)];
+        Space = requirement.AirSpace.GetValueOrDefault() / requirement.FocalLength;
+        Weights = [.. requirement.Band.Samples.Select(s => s.Weight)];
+        Abbe = Column(g => g.AbbeNumber);
+        ShortChange = Column(g => g.ShortChange);
+        LongChange = Column(g => g.LongChange);
+        Floor = Column(g => ThinFloor.Of(g, requirement.Band, quality));
+        Expansion = Column(g => g.Glass.ExpansionPerKelvin ?? double.NaN);
+        Changes = new double[Weights.Length][];
+        Mean = new double[Abbe.Length];
+        for (int k = 0; k < Weights.Length; k++)
+        {
+            Changes[k] = Column(g => g.Changes[k]);
+            for (int j = 0; j < Mean.Length; j++)
+            {
+                Mean[j] += Weights[k] * Changes[k][j];
+            }
+        }
+
+        Variance = new double[Abbe.Length];
+        for (int k = 0; k < Weights.Length; k++)
+        {
+            for (int j = 0; j < Variance.Length; j++)
+            {
+                double off = Changes[k][j] - Mean[j];
+                Variance[j] += Weights[k] * off * off;
+            }
+        }
+    }
+
+    /// <summary>Gets what is to be solved.</summary>
+    public Requirement Requirement { get; }
+
+    /// <summary>Gets the glasses by falling Abbe number; equal ones stay in the order they came.</summary>
+    public GlassIndices[] Glasses { get; }
+
+    /// <summary>Gets how many glasses there are.</summary>
+    public int Count => Glasses.Length;
+
+    /// <summary>Gets δ, the air space in units of the focal length; 0 in contact.</summary>
+    public double Space { get; }
+
+    /// <summary>Gets the weight of each sample.</summary>
+    public double[] Weights { get; }
+
+    /// <summary>Gets the Abbe numbers.</summary>
+    public double[] Abbe { get; }
+
+    /// <summary>Gets t at the short end.</summary>
+    public double[] ShortChange { get; }
+
+    /// <summary>Gets t at the long end.</summary>
+    public double[] LongChange { get; }
+
+    /// <summary>Gets t by sample, then glass.</summary>
+    public double[][] Changes { get; }
+
+    /// <summary>Gets the weighted mean of t over the samples.</summary>
+    public double[] Mean { get; }
+
+    /// <summary>Gets the weighted variance of t over the samples.</summary>
+    public double[] Variance { get; }
+
+    /// <summary>Gets what an element of unit power adds to the variance of the focus, see <see cref="ThinFloor"/>.</summary>
+    public double[] Floor { get; }
+
+    /// <summary>Gets the linear expansion per kelvin; NaN where unknown.</summary>
+    public double[] Expansion { get; }
+
+    private double[] Column(Func<GlassIndices, double> value)
+    {
+        double[] column = new double[Count + Padding];
+        for (int j = 0; j < Count; j++)
+        {
+            column[j] = value(Glasses[j]);
+        }
+
+        if (Count > 0)
+        {
+            Array.Fill(column, column[Count - 1], Count, Padding);
+        }
+
+        return column;
+    }
+}
