@@ -188,18 +188,9 @@ internal sealed class PairScreen
             return PairDropReason.NotIncluded;
         }
 
-        if (_request.Limits.ExpansionDifference is { } most)
+        if (_request.Limits.ReasonAgainst(_glasses.Glasses[front].Glass, _glasses.Glasses[rear].Glass) is { } reason)
         {
-            double difference = Math.Abs(_glasses.Expansion[front] - _glasses.Expansion[rear]);
-            if (double.IsNaN(difference))
-            {
-                return PairDropReason.ExpansionUnknown;
-            }
-
-            if (difference > most)
-            {
-                return PairDropReason.ExpansionDifference;
-            }
+            return reason;
         }
 
         double p1 = _row.FrontPower[rear];
