@@ -6,6 +6,11 @@ namespace GlassPair.Web.Components.Charts;
 /// <summary>The focal shift of a combination against wavelength, over the depth of focus.</summary>
 public sealed partial class FocalShiftChart : ComponentBase
 {
+    private FocalShiftCurve _chosen = null!;
+    private FocalShiftCurve? _pinned;
+    private PlotFigure _figure = null!;
+    private string _label = "";
+
     /// <summary>Gets or sets the combination shown.</summary>
     [Parameter, EditorRequired] public required ThinSolution Chosen { get; set; }
 
@@ -14,4 +19,20 @@ public sealed partial class FocalShiftChart : ComponentBase
 
     /// <summary>Gets or sets whether a newer answer is being computed: the picture is dimmed.</summary>
     [Parameter] public bool Stale { get; set; }
+
+    /// <inheritdoc/>
+    protected override void OnParametersSet()
+    {
+        _chosen = FocalShiftCurve.Of(Chosen);
+        _pinned = Pinned is null ? null : FocalShiftCurve.Of(Pinned);
+        _figure = FocalShiftFigure.Draw(_chosen, _pinned, Chosen.Requirement.Band, Pinned is null ? "" : Name(Pinned));
+        _label = Description();
+    }
+
+    private static string Name(ThinSolution solution) => string.Join(" + ", solution.Elements.Select(e => e.Glass.Name));
+
+    private string Description() =>
+        $"Focal shift of {Name(Chosen)} against wavelength, counted from the middle focus: within ±{NumberText.ShortLength(_chosen.Samples.Max(s => Math.Abs(s.Shift)))} "
+        + $"over the band, where f/{NumberText.Fixed(Chosen.Requirement.FNumber, 1)} allows ±{NumberText.ShortLength(Chosen.Requirement.DepthOfFocus)} at the design wavelength"
+        + (_pinned is null ? "." : $"; {Name(Pinned!)}, pinned, within ±{NumberText.ShortLength(_pinned.Samples.Max(s => Math.Abs(s.Shift)))}.");
 }

@@ -1,0 +1,445 @@
+// Draws the figures of PlotChart. Plotly.Blazor loads plotly.js and makes each chart; from there on this module
+// shows figures in it, keeps the user's zoom, follows the color scheme and reports what is pointed at.
+
+const charts = new Map();
+
+/** Waits for the chart that Plotly.Blazor makes, then listens to it. Fails where the library cannot be loaded. */
+export async function open(id, frameId, dotNet) {
+  const plot = document.getElementById(id);
+  await made(plot);
+  const chart = {
+    plot, dotNet, frame: document.getElementById(frameId), tip: plot.closest('.plot-picture').querySelector('.plot-tip'),
+    colors: new Map(), traces: [], figure: null, serial: 0, zoomed: null, drawn: Promise.resolve(), size: '', pointed: { kind: 0, index: -1 }, reporting: false,
+  };
+  charts.set(id, chart);
+  plot.on('plotly_relayout', e => {
+    if (Object.keys(e).some(key => key.includes('axis.range'))) {
+      chart.zoomed = rangesOf(plot);
+      queue(chart, () => drawShapes(chart));
+    }
+  });
+  plot.on('plotly_doubleclick', () => zoom(id, 0));
+  chart.resizing = new ResizeObserver(() => resize(chart));
+  chart.resizing.observe(plot);
+  listenToPointer(chart);
+  listenToKeys(chart, id);
+}
+
+export function close(id) {
+  charts.get(id)?.resizing.disconnect();
+  charts.delete(id);
+}
+
+/** Shows a figure. `change.traces` holds null for each trace that stays. */
+export async function show(id, change) {
+  const chart = charts.get(id);
+  const before = chart.figure;
+  const changed = change.traces.map((trace, i) => trace && i).filter(i => i !== null);
+  const isSame = before && before.view === change.figure.view && change.traces.length === chart.traces.length
+    && same([before.x, before.y], [change.figure.x, change.figure.y])
+    && changed.every(i => same(looksOf(chart.traces[i]), looksOf(change.traces[i])));
+  chart.serial = change.serial;
+  chart.figure = change.figure;
+  chart.traces = change.traces.map((trace, i) => trace ?? chart.traces[i]);
+  if (before?.view !== chart.figure.view) chart.zoomed = null;
+  await queue(chart, async () => {
+    if (!isSame) return draw(chart);
+    if (changed.length > 0) {
+      await Plotly.animate(chart.plot, { data: changed.map(i => traceOf(chart, chart.traces[i])), traces: changed },
+        { mode: 'immediate', frame: { redraw: false, duration: 0 }, transition: { duration: 0 } });
+    }
+    await drawShapes(chart);
+  });
+}
+
+const same = (a, b) => JSON.stringify(a) === JSON.stringify(b);
+const looksOf = ({ x, y, tips, ...looks }) => looks;
+
+/** Zooms about the middle of the picture by a factor on each axis; 0 goes back to the first view. */
+export function zoom(id, factor) {
+  const chart = charts.get(id);
+  if (factor === 0) {
+    chart.zoomed = null;
+    return queue(chart, () => draw(chart));
+  }
+  return zoomAt(chart, factor, [0.5, 0.5]);
+}
+
+export const download = (id, format, filename) => {
+  const { plot } = charts.get(id);
+  return Plotly.downloadImage(plot, { format, filename, width: plot.clientWidth, height: plot.clientHeight, scale: format === 'png' ? 2 : 1 });
+};
+
+function made(plot) {
+  if (plot._fullLayout) return;
+  const script = document.getElementById('plotly-import');
+  return new Promise((resolve, reject) => {
+    const fail = () => { script?.remove(); reject(new Error('The chart library could not be loaded.')); };
+    const patience = setTimeout(fail, 20_000);
+    // Plotly.Blazor's own listener was there first: when ours is called, it has made the chart.
+    const check = () => { clearTimeout(patience); plot._fullLayout ? resolve() : fail(); };
+    script.addEventListener('load', check);
+    script.addEventListener('error', fail);
+    if (window.Plotly) setTimeout(check);
+  });
+}
+
+/** Runs drawing steps one after the other; a step that was overtaken by a newer one still leaves the newest figure. */
+function queue(chart, step) {
+  chart.drawn = chart.drawn.catch(() => {}).then(() => charts.has(chart.plot.id) ? step() : undefined);
+  return chart.drawn;
+}
+
+async function draw(chart) {
+  await Plotly.react(chart.plot, chart.traces.map(trace => traceOf(chart, trace)), layoutOf(chart), config);
+  await drawShapes(chart); // labels are placed by the axes just drawn
+}
+
+const drawShapes = chart => Plotly.relayout(chart.plot, { shapes: shapesOf(chart) });
+
+function resize(chart) {
+  const size = `${chart.plot.clientWidth} ${chart.plot.clientHeight}`;
+  if (!chart.figure || size === chart.size || !chart.plot.clientWidth) return;
+  chart.size = size;
+  queue(chart, async () => {
+    await Plotly.Plots.resize(chart.plot);
+    await drawShapes(chart);
+  });
+}
+
+// --- color scheme
+
+function repaint() {
+  for (const chart of charts.values()) {
+    chart.colors.clear();
+    if (chart.figure) queue(chart, () => draw(chart));
+  }
+}
+
+matchMedia('(prefers-color-scheme: dark)').addEventListener('change', repaint);
+new MutationObserver(repaint).observe(document.documentElement, { attributes: true, attributeFilter: ['data-scheme'] });
+
+/** The color of a custom property where the chart stands. */
+function paint(chart, token) {
+  if (!token) return 'rgba(0,0,0,0)';
+  if (!chart.colors.has(token)) {
+    const probe = chart.frame.appendChild(document.createElement('span'));
+    probe.hidden = true;
+    probe.style.color = `var(${token})`;
+    chart.colors.set(token, getComputedStyle(probe).color);
+    probe.remove();
+  }
+  return chart.colors.get(token);
+}
+
+// --- figures in plotly's terms
+
+const isCoarse = () => matchMedia('(pointer: coarse)').matches;
+const config = { displayModeBar: false, doubleClick: false }; // as PlotChart makes it: another one would make the chart anew
+
+function traceOf(chart, trace) {
+  const color = paint(chart, trace.color);
+  const hasTips = trace.tips.length > 0;
+  return {
+    type: 'scatter',
+    mode: [trace.width > 0 ? 'lines' : '', trace.mark !== 'None' ? 'markers' : ''].filter(Boolean).join('+') || 'none',
+    // An empty trace would keep its old points.
+    x: trace.x.length ? trace.x : [null],
+    y: trace.y.length ? trace.y : [null],
+    line: { color, width: trace.width, dash: trace.dash || 'solid' },
+    marker: {
+      symbol: trace.mark === 'Cross' ? 'x-thin' : 'circle', size: trace.size,
+      color: trace.mark === 'Ring' ? paint(chart, '--pane') : color, line: { color, width: trace.mark === 'Disk' ? 0 : 1.5 },
+    },
+    hoverinfo: hasTips ? 'text' : 'skip',
+    hovertemplate: hasTips ? '%{text}<extra></extra>' : '',
+    text: hasTips ? trace.tips : '',
+    showlegend: false,
+  };
+}
+
+function layoutOf(chart) {
+  const style = getComputedStyle(chart.frame);
+  const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
+  const [ink, quiet, grid, line, pane] = ['--ink', '--ink-2', '--grid', '--line-strong', '--pane'].map(token => paint(chart, token));
+  const ranges = chart.zoomed ?? [chart.figure.x, chart.figure.y].map(axis => [axis.from, axis.to]);
+  const axis = (of, range) => ({
+    title: { text: of.title, font: { size }, standoff: 6 }, range, tickformat: of.format || undefined, tickfont: { size }, nticks: 8,
+    gridcolor: grid, linecolor: line, showline: true, zeroline: false, ticks: 'outside', ticklen: 3, tickcolor: line, color: quiet, automargin: true,
+  });
+  return {
+    xaxis: axis(chart.figure.x, ranges[0]), yaxis: axis(chart.figure.y, ranges[1]),
+    font: { family: style.fontFamily, size, color: quiet }, paper_bgcolor: pane, plot_bgcolor: pane,
+    margin: { l: 44, r: 8, t: 6, b: 32 }, showlegend: false, autosize: true,
+    dragmode: chart.frame.tabIndex === 0 && !isCoarse() ? 'zoom' : false,
+    hovermode: chart.traces.some(trace => trace.tips.length > 0) ? 'closest' : false,
+    hoverlabel: { bgcolor: pane, bordercolor: line, font: { color: ink, size: size + 1 }, align: 'left' },
+    shapes: [],
+  };
+}
+
+const corners = line => Array.from({ length: line.length / 2 }, (_, i) => [line[2 * i], line[2 * i + 1]]);
+const pathOf = (line, isClosed) => corners(line).map(([x, y], i) => `${i ? 'L' : 'M'}${x},${y}`).join('') + (isClosed ? 'Z' : '');
+
+function shapesOf(chart) {
+  const { disks, guides } = chart.figure;
+  const paths = chart.figure.paths.filter(path => path.lines.length > 0);
+  const pathShape = path => ({
+    type: 'path', path: path.lines.map(line => pathOf(line, path.fill !== null)).join(''), layer: path.isBehind ? 'below' : 'above', opacity: path.opacity,
+    line: { color: paint(chart, path.color), width: path.width, dash: path.dash || 'solid' }, fillcolor: paint(chart, path.fill),
+  });
+  return [
+    ...paths.filter(path => path.isBehind).map(pathShape),
+    ...guides.map(guide => ({
+      type: 'line', yref: 'y domain', x0: guide.x, x1: guide.x, y0: 0, y1: 1, layer: 'below',
+      line: { color: paint(chart, '--line-strong'), width: 1, dash: guide.dash },
+    })),
+    ...paths.filter(path => !path.isBehind).map(pathShape),
+    ...disks.map(disk => ({
+      type: 'circle', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: disk.x, yanchor: disk.y, x0: -disk.radius, x1: disk.radius, y0: -disk.radius, y1: disk.radius,
+      fillcolor: paint(chart, disk.fill), line: { color: paint(chart, disk.color), width: disk.width },
+    })),
+    ...labelsOf(chart),
+  ];
+}
+
+// --- labels: each where it covers least
+
+const gap = 9;      // from an anchor to its label, pixels
+const leading = 1.3;
+
+function labelsOf(chart) {
+  const { xaxis, yaxis } = chart.plot._fullLayout;
+  const toPixel = (x, y) => [xaxis.d2p(x), yaxis.d2p(y)];
+  const bounds = { x: 2, y: 2, w: xaxis._length - 4, h: yaxis._length - 4 };
+  const style = getComputedStyle(chart.frame);
+  const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
+  const measure = measureWith(`600 ${size}px ${style.fontFamily}`);
+  const halo = paint(chart, '--pane');
+  const obstacles = {
+    boxes: chart.figure.disks.map(disk => { const [x, y] = toPixel(disk.x, disk.y); return { x: x - disk.radius, y: y - disk.radius, w: 2 * disk.radius, h: 2 * disk.radius }; }),
+    lines: chart.figure.paths.filter(path => path.fill === null)
+      .flatMap(path => path.lines.flatMap(line => sides(corners(line).map(c => toPixel(...c)))).map(ends => ({ ends, weight: path.repelsLabels ? 40 : 2 }))),
+    dots: chart.traces.filter(trace => trace.mark !== 'None').flatMap(trace => trace.x.map((x, i) => toPixel(x, trace.y[i]))).filter(p => isIn(p, bounds)),
+  };
+  const shapes = [];
+  const put = (lines, candidates, color, isBold) => {
+    const w = Math.max(...lines.map(measure)) + 2;
+    const h = lines.length * size * leading;
+    const best = candidates(w, h).map(({ x, y, cost = 0 }) => ({ x, y, w, h, cost }))
+      .map(box => ({ ...box, cost: box.cost + costOf(box, bounds, obstacles) }))
+      .reduce((least, box) => box.cost < least.cost ? box : least);
+    obstacles.boxes.push(best);
+    const [px, py] = [xaxis.p2d(best.x), yaxis.p2d(best.y)];
+    shapes.push({
+      type: 'rect', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: px, yanchor: py, x0: 0, x1: w, y0: 0, y1: -h, line: { width: 0 },
+      label: {
+        text: lines.map((line, i) => i === 0 && isBold ? `<b>${escape(line)}</b>` : escape(line)).join('<br>'), textposition: 'middle left', padding: 0,
+        font: { size, color, shadow: `0 0 2px ${halo}, 0 0 2px ${halo}, 0 0 3px ${halo}, 0 0 3px ${halo}` },
+      },
+    });
+  };
+
+  for (const guide of chart.figure.guides.filter(guide => guide.text)) {
+    const x = xaxis.d2p(guide.x);
+    if (x >= bounds.x && x <= bounds.w) put([guide.text], (w, h) => [{ x: x + 3, y: 2 }, { x: x - w - 3, y: 2 }, { x: x + 3, y: 4 + h, cost: 2 }, { x: x - w - 3, y: 4 + h, cost: 2 }], paint(chart, '--ink-2'), false);
+  }
+  for (const label of chart.figure.labels) {
+    const lines = [label.title, ...label.notes];
+    const color = paint(chart, label.color);
+    const from = toPixel(label.x, label.y);
+    if (label.toX === null) {
+      if (isIn(from, bounds)) put(lines, (w, h) => around(from, w, h), color, label.isBold);
+    } else {
+      const seen = clip(from, toPixel(label.toX, label.toY), bounds);
+      if (seen) put(lines, (w, h) => along(seen, w, h), color, label.isBold);
+    }
+  }
+  if (chart.figure.note.length > 0) {
+    const { x, y, w: width, h: height } = bounds;
+    put(chart.figure.note, (w, h) => [
+      { x: x + width - w - 4, y: y + height - h - 4 }, { x: x + width - w - 4, y: y + 2, cost: 8 }, { x: x + 4, y: y + height - h - 4, cost: 8 }, { x: x + 4, y: y + 2, cost: 8 },
+    ], paint(chart, '--ink-2'), false);
+  }
+  return shapes;
+}
+
+const around = ([x, y], w, h) => [1, 2.2, 4].flatMap((far, ring) => {
+  const d = gap * far;
+  return [[d, -h / 2], [-d - w, -h / 2], [-w / 2, -d - h], [-w / 2, d], [d * 0.7, d * 0.7], [d * 0.7, -d * 0.7 - h], [-d * 0.7 - w, d * 0.7], [-d * 0.7 - w, -d * 0.7 - h]]
+    .map(([dx, dy], turn) => ({ x: x + dx, y: y + dy, cost: ring * 6 + turn * 0.1 }));
+});
+
+const along = ([[x0, y0], [x1, y1]], w, h) => [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8].flatMap(at => {
+  const [x, y] = [x0 + at * (x1 - x0), y0 + at * (y1 - y0)];
+  return [1, 2, 4].flatMap(far => [{ x: x - w / 2, y: y + gap * far }, { x: x - w / 2, y: y - gap * far - h }].map(box => ({ ...box, cost: far * 1.5 + 4 * Math.abs(at - 0.5) })));
+});
+
+/** What a label would cover: the edge of the picture most, other labels nearly as much, then the lines it must not cross, then dots. */
+function costOf(box, bounds, { boxes, lines, dots }) {
+  const outside = box.w * box.h - overlap(box, bounds);
+  return outside * 10
+    + boxes.reduce((sum, other) => sum + overlap(box, other) * 4, 0)
+    + lines.reduce((sum, { ends, weight }) => sum + (clip(...ends, grown(box, 2)) ? weight : 0), 0)
+    + dots.reduce((sum, dot) => sum + (isIn(dot, box) ? 1.5 : 0), 0);
+}
+
+const sides = points => points.slice(1).map((point, i) => [points[i], point]);
+const grown = (box, by) => ({ x: box.x - by, y: box.y - by, w: box.w + 2 * by, h: box.h + 2 * by });
+const isIn = ([x, y], box) => x >= box.x && x <= box.x + box.w && y >= box.y && y <= box.y + box.h;
+const overlap = (a, b) => Math.max(0, Math.min(a.x + a.w, b.x + b.w) - Math.max(a.x, b.x)) * Math.max(0, Math.min(a.y + a.h, b.y + b.h) - Math.max(a.y, b.y));
+const clamp = (value, least, most) => Math.min(Math.max(value, least), most);
+const escape = text => text.replace(/&/g, '&amp;').replace(/</g, '&lt;');
+
+/** The part of a segment inside a box, by the method of Liang and Barsky; null where none is. */
+function clip([x0, y0], [x1, y1], box) {
+  const [dx, dy] = [x1 - x0, y1 - y0];
+  let [from, to] = [0, 1];
+  for (const [p, q] of [[-dx, x0 - box.x], [dx, box.x + box.w - x0], [-dy, y0 - box.y], [dy, box.y + box.h - y0]]) {
+    if (p === 0 ? q < 0 : false) return null;
+    if (p < 0) from = Math.max(from, q / p);
+    if (p > 0) to = Math.min(to, q / p);
+  }
+  return from < to ? [[x0 + from * dx, y0 + from * dy], [x0 + to * dx, y0 + to * dy]] : null;
+}
+
+const canvas = document.createElement('canvas').getContext('2d');
+const widths = new Map();
+function measureWith(font) {
+  return text => {
+    const key = font + text;
+    if (!widths.has(key)) {
+      if (widths.size > 2000) widths.clear();
+      canvas.font = font;
+      widths.set(key, canvas.measureText(text).width);
+    }
+    return widths.get(key);
+  };
+}
+
+// --- pointer
+
+function listenToPointer(chart) {
+  const { plot } = chart;
+  let down = null;
+  plot.addEventListener('pointermove', e => { if (e.pointerType !== 'touch' && e.buttons === 0) point(chart, e); });
+  plot.addEventListener('pointerleave', () => point(chart, null));
+  plot.addEventListener('pointerdown', e => { down = e.button === 0 ? [e.clientX, e.clientY] : null; }, true);
+  // Plotly covers the page while the button is down, so the end of a click is heard at the window.
+  const up = e => {
+    if (!plot.isConnected) return window.removeEventListener('pointerup', up, true);
+    if (!down) return;
+    const isClick = Math.hypot(e.clientX - down[0], e.clientY - down[1]) < 5;
+    down = null;
+    if (!isClick) return;
+    point(chart, e);
+    const { kind, index } = chart.pointed;
+    if (index >= 0) chart.dotNet.invokeMethodAsync('OnPick', chart.serial, kind, index);
+  };
+  window.addEventListener('pointerup', up, true);
+  plot.addEventListener('wheel', e => {
+    if (!(e.ctrlKey || e.metaKey) || chart.frame.tabIndex !== 0) return;
+    e.preventDefault();
+    const { xaxis, yaxis } = plot._fullLayout;
+    const [x, y] = positionIn(chart, e);
+    zoomAt(chart, e.deltaY < 0 ? 0.8 : 1.25, [clamp(x / xaxis._length, 0, 1), clamp(1 - y / yaxis._length, 0, 1)]);
+  }, { passive: false });
+}
+
+function positionIn({ plot }, e) {
+  const box = plot.getBoundingClientRect();
+  const { l, t } = plot._fullLayout._size;
+  return [e.clientX - box.left - l, e.clientY - box.top - t];
+}
+
+/** Finds what lies under the pointer, moves the tip there and tells the page where it has changed. */
+function point(chart, e) {
+  const { figure, traces, plot, tip } = chart;
+  if (!figure) return;
+  const found = e ? under(chart, positionIn(chart, e), e.pointerType === 'touch' ? 18 : 8) : { kind: 0, index: -1 };
+  if (found.kind === chart.pointed.kind && found.index === chart.pointed.index) return;
+  chart.pointed = found;
+  plot.style.cursor = found.index < 0 ? '' : 'pointer';
+  tip.toggleAttribute('data-open', false);
+  if (found.index >= 0) {
+    const { l, t } = plot._fullLayout._size;
+    tip.style.left = `${found.at[0] + l}px`;
+    tip.style.top = `${found.at[1] + t}px`;
+    tip.toggleAttribute('data-left', found.at[0] > plot.clientWidth / 2);
+    tip.toggleAttribute('data-up', found.at[1] > plot.clientHeight / 2);
+  }
+  report(chart);
+}
+
+/** One report is under way at a time; what has been passed over meanwhile is not reported. */
+async function report(chart) {
+  if (chart.reporting) return;
+  chart.reporting = true;
+  try {
+    let told;
+    while (told !== chart.pointed) {
+      told = chart.pointed;
+      await chart.dotNet.invokeMethodAsync('OnHover', chart.serial, told.kind, told.index);
+    }
+    chart.tip.toggleAttribute('data-open', told.index >= 0);
+  } catch {
+    // The connection is down: the page says so.
+  } finally {
+    chart.reporting = false;
+  }
+}
+
+function under({ figure, traces, plot }, [px, py], reach) {
+  const { xaxis, yaxis } = plot._fullLayout;
+  const nothing = { kind: 0, index: -1 };
+  if (px < 0 || py < 0 || px > xaxis._length || py > yaxis._length) return nothing;
+  let best = { ...nothing, distance: reach };
+  for (const trace of traces.filter(trace => trace.isPickable)) {
+    trace.x.forEach((x, index) => {
+      const at = [xaxis.d2p(x), yaxis.d2p(trace.y[index])];
+      const distance = Math.hypot(at[0] - px, at[1] - py);
+      if (distance < best.distance) best = { kind: 0, index, at, distance };
+    });
+  }
+  // A dot within half the reach goes before the lines that end in it.
+  if (best.index >= 0 && best.distance <= reach / 2) return best;
+  for (const path of figure.paths) {
+    path.picks.forEach((index, i) => {
+      for (const [a, b] of sides(corners(path.lines[i]).map(([x, y]) => [xaxis.d2p(x), yaxis.d2p(y)]))) {
+        const along = [b[0] - a[0], b[1] - a[1]];
+        const at = clamp(((px - a[0]) * along[0] + (py - a[1]) * along[1]) / (along[0] ** 2 + along[1] ** 2 || 1), 0, 1);
+        const distance = Math.hypot(a[0] + at * along[0] - px, a[1] + at * along[1] - py);
+        if (distance < Math.min(best.distance, reach * 0.7)) best = { kind: 1, index, at: [px, py], distance };
+      }
+    });
+  }
+  return best;
+}
+
+// --- keys and zoom
+
+function listenToKeys(chart, id) {
+  chart.frame.addEventListener('keydown', e => {
+    if (e.target !== chart.frame || chart.frame.tabIndex !== 0 || e.ctrlKey || e.metaKey || e.altKey) return;
+    const shift = { ArrowLeft: [-0.15, 0], ArrowRight: [0.15, 0], ArrowUp: [0, 0.15], ArrowDown: [0, -0.15] }[e.key];
+    if (shift) move(chart, ([from, to], i) => [from + shift[i] * (to - from), to + shift[i] * (to - from)]);
+    else if (e.key === '+' || e.key === '=') zoom(id, 0.6);
+    else if (e.key === '-') zoom(id, 1 / 0.6);
+    else if (e.key === '0') zoom(id, 0);
+    else return;
+    e.preventDefault();
+  });
+}
+
+const rangesOf = plot => [plot._fullLayout.xaxis.range.slice(), plot._fullLayout.yaxis.range.slice()];
+
+/** Zooms about the place that lies `at` these shares of width and height from the lower left corner. */
+const zoomAt = (chart, factor, at) =>
+  move(chart, ([from, to], i) => [from + at[i] * (to - from) * (1 - factor), to - (1 - at[i]) * (to - from) * (1 - factor)]);
+
+function move(chart, change) {
+  return queue(chart, async () => {
+    chart.zoomed = rangesOf(chart.plot).map(change);
+    await Plotly.relayout(chart.plot, { 'xaxis.range': chart.zoomed[0], 'yaxis.range': chart.zoomed[1] });
+  });
+}
