@@ -6,6 +6,7 @@ public static class PagesSetup
     /// <summary>Adds what the pages need.</summary>
     public static IServiceCollection AddGlassPairPages(this IServiceCollection services, IConfiguration configuration)
     {
+        services.AddSingleton<Pages.WorkbenchAnswers>();
         services.AddRazorComponents().AddInteractiveServerComponents();
         return services;
     }

@@ -1,2 +1,0 @@
-namespace GlassPair.Web.Components.Controls;
-internal static class Placeholder;

@@ -1,0 +1,268 @@
+using System.Globalization;
+using System.Collections.Immutable;
+using GlassPair.Catalogue;
+using GlassPair.Optics.Glasses;
+using GlassPair.Optics.Rankings;
+using GlassPair.Web.Addresses;
+using GlassPair.Web.Figures;
+using GlassPair.Web.Stocks;
+using Microsoft.AspNetCore.Components;
+using Microsoft.AspNetCore.Components.Routing;
+
+namespace GlassPair.Web.Components.Pages;
+
+/// <summary>The working page: requirement, glass map, chosen pair, ranking; one selection, and all of it in the address.</summary>
+public sealed partial class Workbench : ComponentBase
+{
+    private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(25);
+    private static readonly TimeSpan _patience = TimeSpan.FromMilliseconds(300);
+    private static readonly TimeSpan _addressPause = TimeSpan.FromMilliseconds(400);
+
+    private WorkbenchState _state = WorkbenchState.Empty;
+    private ImmutableArray<string> _misread = [];
+    private RequirementReading _reading = null!;
+    private WorkbenchAnswer? _answer;
+    private RankedPair? _chosen;
+    private RankedPair? _pinned;
+    private string? _chosenProblem;
+    private string? _pinnedProblem;
+    private Candidate? _pointedAt;
+    private string? _failure;
+    private bool _stale;
+    private string _shownQuery = "";
+    private CancellationTokenSource _work = new();
+    private CancellationTokenSource _addressWork = new();
+
+    [Inject] private StockLibrary Library { get; set; } = null!;
+
+    [Inject] private WorkbenchAnswers Answers { get; set; } = null!;
+
+    [Inject] private NavigationManager Navigation { get; set; } = null!;
+
+    private Stock Stock => _state.StockId is { } id && Library.TryFind(id, out Stock? stock) ? stock : Library.Current;
+
+    private IReadOnlyList<string> Makers => [.. Stock.Glasses.Select(g => g.Maker).Distinct()];
+
+    private string Link => Navigation.BaseUri + WorkbenchAddress.Write(_state with { StockId = _state.StockId ?? Stock.Id });
+
+    private Glass? ChosenGlass => _state.ChosenGlass is { } id && Stock.TryFind(id, out Glass? glass) ? glass : null;
+
+    private string AskedFor => _reading.Request is { } request
+        ? $"{FigureText.Plain(request.Requirement.FocalLength)} mm {FigureText.FNumber(request.Requirement.FNumber)}"
+        : "No requirement yet";
+
+    private string AskedDetails
+    {
+        get
+        {
+            if (_reading.Request is not { Requirement: var requirement })
+            {
+                return "";
+            }
+
+            string band = $"{requirement.Band.ShortEnd.Nanometers.ToString("0", CultureInfo.InvariantCulture)}–{requirement.Band.LongEnd.Nanometers.ToString("0", CultureInfo.InvariantCulture)} nm";
+            string halfField = requirement.HalfFieldDegrees > 0.0 ? $", ±{FigureText.Plain(requirement.HalfFieldDegrees)}°" : "";
+            string build = requirement.AirSpace is { } space ? $", air-spaced {FigureText.Plain(space)} mm" : ", cemented";
+            string temperature = requirement.Temperature is { } span ? $", {FigureText.Plain(span.FromCelsius)} to {FigureText.Plain(span.ToCelsius)} °C" : "";
+            return band + halfField + build + temperature;
+        }
+    }
+
+    private string Title => (_reading.Request is null ? "" : $"{AskedFor}, {AskedDetails.Split(',')[0]}")
+        + (_chosen is null ? "" : $": {_chosen.Positive.Glass.Name} + {_chosen.Negative.Glass.Name}") is { Length: > 0 } text ? text + " · GlassPair" : "GlassPair";
+
+    private string Description => _answer is null || _chosen is null
+        ? "Which glasses bring a band of wavelengths to one focus well enough for an aperture, out of everything on sale."
+        : $"{AskedFor} {AskedDetails}. {_chosen.Positive.Glass.Name} ({_chosen.Positive.Glass.Maker}) and {_chosen.Negative.Glass.Name} ({_chosen.Negative.Glass.Maker}): {PairFindings.Of(_chosen, _answer.Shortlist.Request.Quality)[0].Sentence} "
+            + $"{FigureText.Count(_answer.Shortlist.CombinationsHolding)} of {FigureText.Count(_answer.Shortlist.CombinationsFeasible)} pairs hold.";
+
+    private string Waiting => _failure
+        ?? (!_reading.IsStarted ? "Give a focal length and an f-number: the pairs appear as you type."
+        : _reading.Request is null ? "Correct what is marked in the requirement: the pairs appear as you type."
+        : "Ranking every pair of the stock…");
+
+    private IEnumerable<Notice> Notices
+    {
+        get
+        {
+            foreach (string sentence in _misread)
+            {
+                yield return new Notice("tight", sentence, []);
+            }
+
+            if (_chosenProblem is { } chosen)
+            {
+                yield return new Notice("tight", $"The pair in the address cannot be shown. {chosen}", []);
+            }
+
+            if (_pinnedProblem is { } pinned)
+            {
+                yield return new Notice("tight", $"The pinned pair cannot be shown. {pinned}", []);
+            }
+
+            if (_answer is not null && _failure is { } failure)
+            {
+                yield return new Notice("exceeds", failure, []);
+            }
+
+            if (_answer is not null && _reading.Request is null)
+            {
+                yield return new Notice("tight", $"The answer shown is for the last requirement that could be read.", []);
+            }
+        }
+    }
+
+    /// <inheritdoc/>
+    public void Dispose()
+    {
+        Navigation.LocationChanged -= OnLocationChanged;
+        _work.Cancel();
+        _work.Dispose();
+        _addressWork.Cancel();
+        _addressWork.Dispose();
+    }
+
+    /// <inheritdoc/>
+    protected override async Task OnInitializedAsync()
+    {
+        Navigation.LocationChanged += OnLocationChanged;
+        ReadAddress();
+        await AnswerAsync(TimeSpan.Zero);
+    }
+
+    private void ReadAddress()
+    {
+        _shownQuery = new Uri(Navigation.Uri).Query;
+        (_state, _misread) = WorkbenchAddress.Read(_shownQuery);
+        _reading = RequirementReading.Of(_state, Stock);
+    }
+
+    private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(async () =>
+    {
+        if (new Uri(e.Location) is { AbsolutePath: var path, Query: var query } && query != _shownQuery && path == new Uri(Navigation.BaseUri).AbsolutePath)
+        {
+            ReadAddress();
+            await AnswerAsync(TimeSpan.Zero);
+        }
+    });
+
+    private async Task TypeAsync(WorkbenchState next)
+    {
+        Set(next);
+        await Task.WhenAll(AnswerAsync(_pause), ReplaceAddressAsync());
+    }
+
+    private async Task PickAsync(WorkbenchState next)
+    {
+        Set(next);
+        Navigate(replace: false);
+        await AnswerAsync(TimeSpan.Zero);
+    }
+
+    private Task ChooseAsync(PairName name) => PickAsync(_state with { Chosen = name });
+
+    private Task PinAsync(RankedPair pair) =>
+        PickAsync(_state with { Pinned = PairName.Of(pair.Solution) == _state.Pinned ? null : PairName.Of(pair.Solution) });
+
+    private Task PickGlassAsync(Glass glass) => PickAsync(_state with { ChosenGlass = _state.ChosenGlass == glass.Id ? null : glass.Id });
+
+    private Task PointAtAsync(Candidate? candidate)
+    {
+        _pointedAt = candidate;
+        return Task.CompletedTask;
+    }
+
+    private void Set(WorkbenchState next)
+    {
+        _state = next with { StockId = next.StockId ?? Stock.Id };
+        _misread = [];
+        _reading = RequirementReading.Of(_state, Stock);
+    }
+
+    private async Task ReplaceAddressAsync()
+    {
+        CancellationToken cancellation = Restart(ref _addressWork);
+        await Task.Delay(_addressPause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
+        if (!cancellation.IsCancellationRequested)
+        {
+            Navigate(replace: true);
+        }
+    }
+
+    private void Navigate(bool replace)
+    {
+        _addressWork.Cancel();
+        string query = WorkbenchAddress.Write(_state);
+        if (query != _shownQuery)
+        {
+            _shownQuery = query;
+            Navigation.NavigateTo(query, new NavigationOptions { ReplaceHistoryEntry = replace });
+        }
+    }
+
+    /// <summary>Ranks for the state, after a pause in which the next keystroke may come; the answer before it stays until then.</summary>
+    private async Task AnswerAsync(TimeSpan pause)
+    {
+        CancellationToken cancellation = Restart(ref _work);
+        if (_reading.Request is not { } request)
+        {
+            _stale = _answer is not null;
+            Choose();
+            return;
+        }
+
+        if (Answers.Find(_state, Stock) is { } kept)
+        {
+            Show(kept);
+            return;
+        }
+
+        try
+        {
+            await Task.Delay(pause, cancellation);
+            Task<WorkbenchAnswer> work = Answers.AnswerAsync(_state, request, Stock, cancellation);
+            if (await Task.WhenAny(work, Task.Delay(_patience, cancellation)) != work && !cancellation.IsCancellationRequested)
+            {
+                _stale = true;
+                StateHasChanged();
+            }
+
+            Show(await work);
+        }
+        catch (OperationCanceledException)
+        {
+            // A newer requirement took over, or the page was closed.
+        }
+    }
+
+    private void Show(WorkbenchAnswer answer)
+    {
+        (_answer, _stale, _failure) = (answer, false, null);
+        Choose();
+    }
+
+    /// <summary>Finds the chosen and the pinned pair in the answer shown.</summary>
+    private void Choose()
+    {
+        (_chosenProblem, _pinnedProblem) = (null, null);
+        if (_answer is null)
+        {
+            (_chosen, _pinned) = (null, null);
+            return;
+        }
+
+        _chosen = (_state.Chosen is { } name ? _answer.Find(name, out _chosenProblem) : null) ?? _answer.Pairs.FirstOrDefault();
+        _pinned = _state.Pinned is { } pin ? _answer.Find(pin, out _pinnedProblem) : null;
+        _pointedAt = null;
+    }
+
+    private static CancellationToken Restart(ref CancellationTokenSource source)
+    {
+        source.Cancel();
+        source.Dispose();
+        source = new CancellationTokenSource();
+        return source.Token;
+    }
+
+    private sealed record Notice(string Kind, string Text, ImmutableArray<(string Text, string Href)> Links);
+}

@@ -1,0 +1,48 @@
+using System.Collections.Concurrent;
+using GlassPair.Catalogue;
+using GlassPair.Optics.Rankings;
+using GlassPair.Web.Addresses;
+using GlassPair.Web.Work;
+
+namespace GlassPair.Web.Components.Pages;
+
+/// <summary>Answers states of the working page, and keeps the last few: a prerendered page, Back and a colleague's link find theirs at once.</summary>
+/// <remarks>One instance for the whole process; safe to use from any thread.</remarks>
+public sealed class WorkbenchAnswers(ShortlistService shortlists)
+{
+    private const int Most = 24;
+    private readonly ConcurrentDictionary<string, WorkbenchAnswer> _kept = new(StringComparer.Ordinal);
+    private readonly ConcurrentQueue<string> _order = new();
+
+    /// <summary>Finds an answer that is still kept.</summary>
+    public WorkbenchAnswer? Find(WorkbenchState state, Stock stock) => _kept.GetValueOrDefault(KeyOf(state, stock));
+
+    /// <summary>Ranks for a state.</summary>
+    /// <param name="state">The state.</param>
+    /// <param name="request">What it amounts to.</param>
+    /// <param name="stock">The stock to rank.</param>
+    /// <param name="cancellation">Stops the work.</param>
+    public async Task<WorkbenchAnswer> AnswerAsync(WorkbenchState state, ShortlistRequest request, Stock stock, CancellationToken cancellation)
+    {
+        string key = KeyOf(state, stock);
+        if (_kept.TryGetValue(key, out WorkbenchAnswer? kept))
+        {
+            return kept;
+        }
+
+        ShortlistAnswer ranked = await shortlists.RankAsync(stock, request, cancellation).ConfigureAwait(false);
+        var answer = new WorkbenchAnswer(state, ranked, shortlists.TableOf(stock, request.Requirement.Band));
+        if (_kept.TryAdd(key, answer))
+        {
+            _order.Enqueue(key);
+            while (_order.Count > Most && _order.TryDequeue(out string? oldest))
+            {
+                _kept.TryRemove(oldest, out _);
+            }
+        }
+
+        return answer;
+    }
+
+    private static string KeyOf(WorkbenchState state, Stock stock) => stock.Id + WorkbenchAddress.Write(state.ForRanking() with { StockId = null });
+}
