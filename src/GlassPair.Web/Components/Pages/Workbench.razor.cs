@@ -6,6 +6,7 @@ using GlassPair.Optics.Rankings;
 using GlassPair.Web.Addresses;
 using GlassPair.Web.Figures;
 using GlassPair.Web.Stocks;
+using GlassPair.Web.Work;
 using Microsoft.AspNetCore.Components;
 using Microsoft.AspNetCore.Components.Routing;
 
@@ -232,6 +233,10 @@ public sealed partial class Workbench : ComponentBase
         catch (OperationCanceledException)
         {
             // A newer requirement took over, or the page was closed.
+        }
+        catch (ServerBusyException busy)
+        {
+            (_failure, _stale) = (busy.Message, _answer is not null);
         }
     }
 
