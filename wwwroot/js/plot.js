@@ -165,7 +165,7 @@ function layoutOf(chart) {
   const ranges = chart.zoomed ?? [chart.figure.x, chart.figure.y].map(axis => [axis.from, axis.to]);
   const axis = (of, range) => ({
     title: { text: of.title, font: { size }, standoff: 6 }, range, tickformat: of.format || undefined, tickfont: { size }, nticks: 8,
-    gridcolor: grid, linecolor: line, showline: true, zeroline: false, ticks: 'outside', ticklen: 3, tickcolor: line, color: quiet, automargin: true,
+    gridcolor: grid, linecolor: line, showline: true, zeroline: true, zerolinecolor: line, zerolinewidth: 1, ticks: 'outside', ticklen: 3, tickcolor: line, color: quiet, automargin: true,
   });
   return {
     xaxis: axis(chart.figure.x, ranges[0]), yaxis: axis(chart.figure.y, ranges[1]),
@@ -182,7 +182,8 @@ const corners = line => Array.from({ length: line.length / 2 }, (_, i) => [line[
 const pathOf = (line, isClosed) => corners(line).map(([x, y], i) => `${i ? 'L' : 'M'}${x},${y}`).join('') + (isClosed ? 'Z' : '');
 
 function shapesOf(chart) {
-  const { disks, guides } = chart.figure;
+  const { disks, guides, y: { from, to } } = chart.figure;
+  const far = 20 * (to - from); // ends out of sight at any zoom; a line that hangs on the picture's edges would lie under the areas
   const paths = chart.figure.paths.filter(path => path.lines.length > 0);
   const pathShape = path => ({
     type: 'path', path: path.lines.map(line => pathOf(line, path.fill !== null)).join(''), layer: path.isBehind ? 'below' : 'above', opacity: path.opacity,
@@ -191,7 +192,7 @@ function shapesOf(chart) {
   return [
     ...paths.filter(path => path.isBehind).map(pathShape),
     ...guides.map(guide => ({
-      type: 'line', yref: 'y domain', x0: guide.x, x1: guide.x, y0: 0, y1: 1, layer: 'below',
+      type: 'line', x0: guide.x, x1: guide.x, y0: from - far, y1: to + far, layer: 'below',
       line: { color: paint(chart, '--line-strong'), width: 1, dash: guide.dash },
     })),
     ...paths.filter(path => !path.isBehind).map(pathShape),

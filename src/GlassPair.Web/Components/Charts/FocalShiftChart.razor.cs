@@ -1,5 +1,6 @@
 using GlassPair.Optics.Color;
 using Microsoft.AspNetCore.Components;
+using GlassPair.Web.Figures;
 
 namespace GlassPair.Web.Components.Charts;
 
@@ -32,7 +33,7 @@ public sealed partial class FocalShiftChart : ComponentBase
     private static string Name(ThinSolution solution) => string.Join(" + ", solution.Elements.Select(e => e.Glass.Name));
 
     private string Description() =>
-        $"Focal shift of {Name(Chosen)} against wavelength, counted from the middle focus: within ±{NumberText.ShortLength(_chosen.Samples.Max(s => Math.Abs(s.Shift)))} "
-        + $"over the band, where f/{NumberText.Fixed(Chosen.Requirement.FNumber, 1)} allows ±{NumberText.ShortLength(Chosen.Requirement.DepthOfFocus)} at the design wavelength"
-        + (_pinned is null ? "." : $"; {Name(Pinned!)}, pinned, within ±{NumberText.ShortLength(_pinned.Samples.Max(s => Math.Abs(s.Shift)))}.");
+        $"Focal shift of {Name(Chosen)} against wavelength, counted from the middle focus: within ±{FigureText.ShortLength(_chosen.Samples.Max(s => Math.Abs(s.Shift)))} "
+        + $"over the band, where f/{FigureText.Fixed(Chosen.Requirement.FNumber, 1)} allows ±{FigureText.ShortLength(Chosen.Requirement.DepthOfFocus)} at the design wavelength"
+        + (_pinned is null ? "." : $"; {Name(Pinned!)}, pinned, within ±{FigureText.ShortLength(_pinned.Samples.Max(s => Math.Abs(s.Shift)))}.");
 }

@@ -1,6 +1,8 @@
 using System.Collections.Immutable;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Spectrum;
+using GlassPair.Web.Addresses;
+using GlassPair.Web.Figures;
 
 namespace GlassPair.Web.Components.Charts;
 
@@ -42,7 +44,7 @@ internal static class FocalShiftFigure
             Mark = PlotMark.Ring,
             Size = 6.0,
             Tips = [.. chosen.Samples.Select(p =>
-                $"{NumberText.Fixed(p.Wavelength.Nanometers, 1)} nm: {NumberText.ShortLength(p.Shift)}, depth of focus ±{NumberText.ShortLength(p.DepthOfFocus)}")],
+                $"{FigureText.Fixed(p.Wavelength.Nanometers, 1)} nm: {FigureText.ShortLength(p.Shift)}, depth of focus ±{FigureText.ShortLength(p.DepthOfFocus)}")],
         };
         PlotTrace[] traces = pinned is null
             ? [Curve(chosen) with { Width = 2.0 }, samples]
@@ -56,15 +58,17 @@ internal static class FocalShiftFigure
             Paths = [zone, Line(chosen.Curve)],
             Guides =
             [
-                new PlotGuide(band.ShortEnd.Nanometers, LineNames.Of(band.ShortEnd)),
-                new PlotGuide(band.Design.Nanometers, LineNames.Of(band.Design), ""),
-                new PlotGuide(band.LongEnd.Nanometers, LineNames.Of(band.LongEnd)),
+                new PlotGuide(band.ShortEnd.Nanometers, LineName(band.ShortEnd)),
+                new PlotGuide(band.Design.Nanometers, LineName(band.Design), ""),
+                new PlotGuide(band.LongEnd.Nanometers, LineName(band.LongEnd)),
             ],
             Labels = seen is { } at
                 ? [new PlotLabel(at.Wavelength.Nanometers, Height(at.Shift), pinnedName + ", pinned") { Color = "--ink-2" }]
                 : [],
-            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus ±2λN² (±{NumberText.ShortLength(depth)} at most)"],
+            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus ±2λN² (±{FigureText.ShortLength(depth)} at most)"],
         };
+
+        static string LineName(Wavelength wavelength) => WavelengthText.LineAt(wavelength)?.Symbol ?? FigureText.Fixed(wavelength.Nanometers, 0);
 
         PlotTrace Curve(FocalShiftCurve curve) => new(
             [.. curve.Curve.Select(p => Math.Round(p.Wavelength.Nanometers, 2))], [.. curve.Curve.Select(p => Height(p.Shift))]);

@@ -5,6 +5,7 @@ using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using Microsoft.AspNetCore.Components;
+using GlassPair.Web.Figures;
 
 namespace GlassPair.Web.Components.Charts;
 
@@ -76,28 +77,18 @@ public sealed partial class GlassMap : ComponentBase
     private static string PairName(ThinSolution solution) => string.Join(" + ", solution.Elements.Select(e => e.Glass.Name));
 
     private static string SlopeText(ThinSolution solution) =>
-        solution.Elements.Length == 2 && Chord.SlopeOf(solution.Elements[0], solution.Elements[1]) is { } slope ? NumberText.PowerOfTen(slope, 2) : "";
+        solution.Elements.Length == 2 && Chord.SlopeOf(solution.Elements[0], solution.Elements[1]) is { } slope ? FigureText.PowerOfTen(slope, 2) : "";
 
     private static string Facts(ThinSolution solution) =>
-        $"secondary spectrum {NumberText.ShortLength(solution.SecondarySpectrum)}, color residual {NumberText.ShortLength(solution.RmsFocalShift)} RMS, "
-        + $"{(solution.Holds ? "holds" : "would hold")} down to f/{NumberText.Fixed(solution.ColorLimitedFNumber, 1)}";
+        $"secondary spectrum {FigureText.ShortLength(solution.SecondarySpectrum)}, color residual {FigureText.ShortLength(solution.RmsFocalShift)} RMS, "
+        + $"{(solution.Holds ? "holds" : "would hold")} down to f/{FigureText.Fixed(solution.ColorLimitedFNumber, 1)}";
 
-    private static string SupplyText(Glass glass)
-    {
-        string supply = glass.Supply switch
-        {
-            Supply.Recommended => "recommended",
-            Supply.Listed => "listed",
-            Supply.OnRequest => "on request",
-            Supply.Discontinued => "discontinued",
-            _ => "supply unconfirmed",
-        };
-        return glass.Edition is { } edition ? $"{supply}, maker’s list of {edition}" : supply;
-    }
+    private static string SupplyText(Glass glass) =>
+        FigureText.Of(glass.Supply) + (glass.Edition is { } edition ? $", maker’s list of {edition}" : "");
 
     private string? SpectrumWith(GlassIndices other) =>
         _drawing.Glass is { } glass && glass.Glass.Id != other.Glass.Id && Chord.SecondarySpectrum(Requirement, glass, other) is { } spectrum
-            ? NumberText.ShortLength(spectrum)
+            ? FigureText.ShortLength(spectrum)
             : null;
 
     private string Description()

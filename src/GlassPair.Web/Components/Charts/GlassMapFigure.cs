@@ -4,6 +4,7 @@ using GlassPair.Optics.Color;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
+using GlassPair.Web.Figures;
 
 namespace GlassPair.Web.Components.Charts;
 
@@ -174,9 +175,9 @@ internal sealed class GlassMapFigure
         {
             (double x, double y) = Place(solution.Elements[0]);
             (double toX, double toY) = Place(solution.Elements[1]);
-            string title = "slope " + NumberText.PowerOfTen(slope, 2);
+            string title = "slope " + FigureText.PowerOfTen(slope, 2);
             yield return isChosen
-                ? new PlotLabel(x, y, title) { ToX = toX, ToY = toY, IsBold = true, Notes = ["secondary spectrum " + NumberText.ShortLength(spectrum)] }
+                ? new PlotLabel(x, y, title) { ToX = toX, ToY = toY, IsBold = true, Notes = ["secondary spectrum " + FigureText.ShortLength(spectrum)] }
                 : new PlotLabel(x, y, title) { ToX = toX, ToY = toY, Color = "--ink-2" };
         }
     }
