@@ -8,7 +8,7 @@ internal static class GlassRemarks
 {
     private const double IndexTolerance = 1e-5;
 
-    /// <summary>Makers compute v_d from indices rounded to five decimals, which moves it by up to about this much.</summary>
+    /// <summary>The v_d of some makers differs from their own coefficients by up to 0.009: less than this says nothing about a glass.</summary>
     private const double AbbeTolerance = 0.01;
 
     /// <summary>Half a unit of the only decimal that some makers print; a trailing zero may be gone.</summary>

@@ -22,7 +22,7 @@ internal sealed record GlassRow(Glass Glass, CsvRow Row, ImmutableArray<string> 
             {
                 CatalogueFormat.Sellmeier => Stated(row, SellmeierOf(row)),
                 CatalogueFormat.PowerSeries => Stated(row, PowerSeriesOf(row)),
-                CatalogueFormat.Measured => Fitted(row),
+                CatalogueFormat.Measured => Fitted(row, remarks),
                 _ => null,
             };
         StatedValues stated = new(row.Number(CatalogueFormat.Nd), row.Number(CatalogueFormat.Vd), row.Number(CatalogueFormat.DeltaPgF), Code(row));
@@ -163,7 +163,39 @@ internal sealed record GlassRow(Glass Glass, CsvRow Row, ImmutableArray<string> 
         return (formula, range, null);
     }
 
-    private static (DispersionFormula Formula, WavelengthRange Range, DispersionFit? Fit)? Fitted(CsvRow row) => null;
+    private static (DispersionFormula Formula, WavelengthRange Range, DispersionFit? Fit)? Fitted(CsvRow row, List<string> remarks)
+    {
+        RefuseOthers(row, CatalogueFormat.Measured, [
+            CatalogueFormat.RangeFrom, CatalogueFormat.RangeTo, .. CatalogueFormat.SellmeierTerms.SelectMany(t => new[] { t.B, t.C }),
+            CatalogueFormat.Constant, .. CatalogueFormat.PowerTerms.Select(t => t.Column)]);
+        if (!row.Has(CatalogueFormat.MeasuredIndices))
+        {
+            row.Error("Is empty; the form measured needs its indices, such as 365 1.54879; 404.66 1.54111; 435.83 1.536704.", CatalogueFormat.MeasuredIndices);
+        }
+
+        ImmutableArray<(double At, double Value)> samples = row.Samples(CatalogueFormat.MeasuredIndices);
+        if (samples.IsEmpty)
+        {
+            return null;
+        }
+
+        FitOutcome outcome = DispersionFitter.FitLeavingOutMisprints([.. samples.Select(s => new MeasuredIndex(Wavelength.FromNanometers(s.At), s.Value))]);
+        if (outcome is not DispersionFit fit)
+        {
+            row.Error(string.Join(" ", ((NoDispersionFit)outcome).Faults.Select(f => f.Sentence)), CatalogueFormat.MeasuredIndices);
+            return null;
+        }
+
+        if (FormulaCheck.FindFault(fit.Formula, fit.Range) is { } fault)
+        {
+            row.Error($"No formula fits these indices. {fault}", CatalogueFormat.MeasuredIndices);
+            return null;
+        }
+
+        remarks.AddRange(fit.LeftOut.Select(left => $"A measured index was left out of the fit: {left.Reason}"));
+        remarks.AddRange(fit.Warnings);
+        return (fit.Formula, fit.Range, fit);
+    }
 
     private static void RefuseOthers(CsvRow row, string form, IEnumerable<CatalogueColumn> others)
     {

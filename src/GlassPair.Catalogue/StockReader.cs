@@ -55,6 +55,11 @@ public static class StockReader
         }
 
         files.Sort((a, b) => string.CompareOrdinal(a.Name, b.Name));
+        foreach ((CatalogueFile _, CatalogueFile next) in files.Zip(files.Skip(1)).Where(pair => pair.First.Name == pair.Second.Name))
+        {
+            issues.Error(next.Name, 0, "Two files have this name.");
+        }
+
         List<GlassRow> rows = [];
         var firstOf = new Dictionary<string, CsvRow>(StringComparer.Ordinal);
         foreach (CatalogueFile file in files)
