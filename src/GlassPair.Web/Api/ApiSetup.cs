@@ -1,7 +1,9 @@
 using System.Globalization;
 using System.Text.Json;
 using System.Text.Json.Serialization;
+using GlassPair.Web.Hosting;
 using GlassPair.Web.Work;
+using Microsoft.Extensions.Options;
 
 namespace GlassPair.Web.Api;
 
@@ -55,6 +57,7 @@ public static class ApiSetup
     public static WebApplication MapGlassPairApi(this WebApplication app)
     {
         RouteGroupBuilder api = app.MapGroup($"{Root}/v1");
+        api.WithApiLimits(app.Services.GetRequiredService<IOptions<LimitOptions>>().Value);
         RouteGroupBuilder glasses = api.MapGroup("").WithTags("Glasses");
         Only(HttpMethods.Get, glasses, "stocks", GlassEndpoints.ListStocks);
         Only(HttpMethods.Get, glasses, "glasses", GlassEndpoints.ListGlasses);

@@ -14,7 +14,8 @@ public static class PagesSetup
     /// <summary>Maps the pages.</summary>
     public static WebApplication MapGlassPairPages(this WebApplication app)
     {
-        app.MapRazorComponents<App>().AddInteractiveServerRenderMode();
+        // The policy of the security headers covers frames.
+        app.MapRazorComponents<App>().AddInteractiveServerRenderMode(options => options.ContentSecurityFrameAncestorsPolicy = null);
         return app;
     }
 }

@@ -1,0 +1,61 @@
+using System.Net.Sockets;
+using GlassPair.Web.Stocks;
+using Microsoft.AspNetCore.Connections;
+using Microsoft.AspNetCore.Hosting.Server;
+using Microsoft.AspNetCore.Hosting.Server.Features;
+using Microsoft.Extensions.Options;
+
+namespace GlassPair.Web.Hosting;
+
+/// <summary>Starts the site and says in words where it can be opened, or why it cannot start.</summary>
+public static class Startup
+{
+    /// <summary>The address where no other is set.</summary>
+    public const string UsualAddress = "http://localhost:5080";
+
+    /// <summary>Keeps the host from logging why it could not start, which <see cref="RunToEndAsync"/> says in words.</summary>
+    public static IServiceCollection AddWordsAtStart(this IServiceCollection services)
+    {
+        services.AddOptions<LoggerFilterOptions>().Configure<IServiceProvider>((options, provider) => options.Rules.Add(new LoggerFilterRule(
+            providerName: null,
+            "Microsoft.Extensions.Hosting.Internal.Host",
+            logLevel: null,
+            (_, _, _) => provider.GetRequiredService<IHostApplicationLifetime>().ApplicationStarted.IsCancellationRequested)));
+        return services;
+    }
+
+    /// <summary>Runs the site until it is stopped; 0 after a regular stop, 1 where it could not start.</summary>
+    public static async Task<int> RunToEndAsync(this WebApplication app)
+    {
+        try
+        {
+            _ = app.Services.GetRequiredService<StockLibrary>();
+            await app.StartAsync();
+        }
+        catch (IOException problem) when (problem.InnerException is AddressInUseException or SocketException)
+        {
+            await Console.Error.WriteLineAsync(
+                $"GlassPair cannot start: {problem.Message} Stop the other program, or choose another address with --urls http://localhost:5081");
+            return 1;
+        }
+
+        catch (OptionsValidationException problem)
+        {
+            await Console.Error.WriteLineAsync($"GlassPair cannot start: its settings are wrong. {problem.Message}");
+            return 1;
+        }
+
+        foreach (string address in app.Services.GetRequiredService<IServer>().Features.Get<IServerAddressesFeature>()?.Addresses ?? [])
+        {
+            Console.WriteLine($"GlassPair is ready: open {Readable(address)}");
+        }
+
+        await app.WaitForShutdownAsync();
+        return 0;
+    }
+
+    private static string Readable(string address) => address
+        .Replace("//[::]", "//localhost", StringComparison.Ordinal)
+        .Replace("//0.0.0.0", "//localhost", StringComparison.Ordinal)
+        .Replace("//127.0.0.1", "//localhost", StringComparison.Ordinal);
+}
