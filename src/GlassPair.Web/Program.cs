@@ -28,13 +28,22 @@ builder.Services.AddGlassPairWork(builder.Configuration);
 builder.Services.AddGlassPairApi(builder.Configuration);
 builder.Services.AddGlassPairPages(builder.Configuration);
 
-WebApplication app = builder.Build();
-app.UseGlassPairHosting();
-app.UseGlassPairApi();
-app.UseRequestLimits();
-app.UseAntiforgery();
-app.MapStaticAssets();
-app.MapHealth();
-app.MapGlassPairApi();
-app.MapGlassPairPages();
-return await app.RunToEndAsync();
+try
+{
+    await using WebApplication app = builder.Build();
+    app.UseGlassPairHosting();
+    app.UseGlassPairApi();
+    app.UseRequestLimits();
+    app.UseAntiforgery();
+    app.MapStaticAssets();
+    app.MapHealth();
+    app.MapGlassPairApi();
+    app.MapGlassPairPages();
+    await app.RunToEndAsync();
+    return 0;
+}
+catch (Exception problem) when (Startup.Explain(problem) is { } words)
+{
+    await Console.Error.WriteLineAsync(words);
+    return 1;
+}

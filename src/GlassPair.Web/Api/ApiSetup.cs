@@ -4,6 +4,7 @@ using System.Text.Json.Serialization;
 using GlassPair.Web.Hosting;
 using GlassPair.Web.Work;
 using Microsoft.Extensions.Options;
+using Scalar.AspNetCore;
 
 namespace GlassPair.Web.Api;
 
@@ -22,19 +23,8 @@ public static class ApiSetup
             options.SerializerOptions.Converters.Add(new JsonStringEnumConverter(JsonNamingPolicy.CamelCase, allowIntegerValues: false));
         });
         services.Configure<RouteHandlerOptions>(options => options.ThrowOnBadRequest = true);
-        services.AddProblemDetails(options => options.CustomizeProblemDetails = context =>
-        {
-            context.ProblemDetails.Extensions["traceId"] = context.HttpContext.TraceIdentifier;
-            if (context.Exception is BadHttpRequestException or ServerBusyException)
-            {
-                context.ProblemDetails.Detail = context.Exception.Message;
-            }
-
-            if (context.Exception is ServerBusyException busy)
-            {
-                context.HttpContext.Response.Headers.RetryAfter = busy.RetryAfter.TotalSeconds.ToString("0", CultureInfo.InvariantCulture);
-            }
-        });
+        services.AddProblemDetails(options => options.CustomizeProblemDetails = AddWords);
+        services.AddOpenApi("v1", ApiDocument.Configure);
         return services;
     }
 
@@ -53,32 +43,61 @@ public static class ApiSetup
         return app;
     }
 
-    /// <summary>Maps the API's routes.</summary>
+    /// <summary>Maps the API's routes, its OpenAPI document, and the reference page.</summary>
     public static WebApplication MapGlassPairApi(this WebApplication app)
     {
         RouteGroupBuilder api = app.MapGroup($"{Root}/v1");
         api.WithApiLimits(app.Services.GetRequiredService<IOptions<LimitOptions>>().Value);
+        api.ProducesProblem(StatusCodes.Status400BadRequest).ProducesProblem(StatusCodes.Status429TooManyRequests);
+
         RouteGroupBuilder glasses = api.MapGroup("").WithTags("Glasses");
-        Only(HttpMethods.Get, glasses, "stocks", GlassEndpoints.ListStocks);
-        Only(HttpMethods.Get, glasses, "glasses", GlassEndpoints.ListGlasses);
-        Only(HttpMethods.Get, glasses, "glasses/{maker}/{name}", GlassEndpoints.ShowGlass);
-        Only(HttpMethods.Get, glasses, "glasses/{maker}/{name}/index", GlassEndpoints.ShowIndex);
-        RouteGroupBuilder solutions = api.MapGroup("").WithTags("Solutions");
-        Only(HttpMethods.Post, solutions, "pair", SolutionEndpoints.SolvePair);
-        Only(HttpMethods.Post, solutions, "triplet", SolutionEndpoints.SolveTriplet);
-        Only(HttpMethods.Post, solutions, "shortlist", ShortlistEndpoint.Rank);
+        Get(glasses, "stocks", GlassEndpoints.ListStocks);
+        Get(glasses, "glasses", GlassEndpoints.ListGlasses, GlassEndpoints.ListParameters).ProducesProblem(StatusCodes.Status404NotFound);
+        Get(glasses, "glasses/{maker}/{name}", GlassEndpoints.ShowGlass, GlassEndpoints.GlassParameters).ProducesProblem(StatusCodes.Status404NotFound);
+        Get(glasses, "glasses/{maker}/{name}/index", GlassEndpoints.ShowIndex, GlassEndpoints.IndexParameters)
+            .ProducesProblem(StatusCodes.Status404NotFound)
+            .ProducesProblem(StatusCodes.Status422UnprocessableEntity);
+        Post(glasses, "fit", FitEndpoint.Fit, Examples.Fit);
+
+        RouteGroupBuilder solutions = api.MapGroup("").WithTags("Solutions").ProducesProblem(StatusCodes.Status404NotFound);
+        Post(solutions, "pair", SolutionEndpoints.SolvePair, Examples.Pair);
+        Post(solutions, "triplet", SolutionEndpoints.SolveTriplet, Examples.Triplet);
+        Post(solutions, "shortlist", ShortlistEndpoint.Rank, Examples.Shortlist)
+            .ProducesProblem(StatusCodes.Status503ServiceUnavailable)
+            .ProducesProblem(StatusCodes.Status504GatewayTimeout);
+
+        app.MapOpenApi();
+        app.MapScalarApiReference(SecurityHeaders.ReferencePage, (options, context) => options
+            .WithTitle("GlassPair API")
+            .WithNonce(context.Nonce())
+            .DisableDefaultFonts()
+            .DisableAgent()
+            .DisableMcp()
+            .DisableTelemetry()
+            .HideDeveloperTools()
+            .HideClientButton());
         return app;
     }
 
+    private static RouteHandlerBuilder Get(RouteGroupBuilder group, string pattern, Delegate handler, params QueryParameter[] parameters) =>
+        Only(HttpMethods.Get, group, pattern, handler).WithMetadata([.. parameters]);
+
+    private static RouteHandlerBuilder Post(RouteGroupBuilder group, string pattern, Delegate handler, string example) =>
+        Only(HttpMethods.Post, group, pattern, handler)
+            .WithMetadata(new BodyExample(example))
+            .ProducesProblem(StatusCodes.Status413PayloadTooLarge)
+            .ProducesProblem(StatusCodes.Status415UnsupportedMediaType)
+            .ProducesProblem(StatusCodes.Status422UnprocessableEntity);
+
     /// <summary>Maps a route for one method; the others get 405 with words, also where a fallback route would catch them.</summary>
-    private static void Only(string method, RouteGroupBuilder group, string pattern, Delegate handler)
+    private static RouteHandlerBuilder Only(string method, RouteGroupBuilder group, string pattern, Delegate handler)
     {
-        group.MapMethods(pattern, [method], handler);
         group.Map(pattern, (HttpResponse response) =>
         {
             response.Headers.Allow = method;
             return TypedResults.Problem(detail: $"Use {method} here.", statusCode: StatusCodes.Status405MethodNotAllowed);
         }).ExcludeFromDescription();
+        return group.MapMethods(pattern, [method], handler).WithName(handler.Method.Name);
     }
 
     private static int StatusOf(Exception problem) => problem switch
@@ -87,4 +106,18 @@ public static class ApiSetup
         ServerBusyException => StatusCodes.Status503ServiceUnavailable,
         _ => StatusCodes.Status500InternalServerError,
     };
+
+    private static void AddWords(ProblemDetailsContext context)
+    {
+        context.ProblemDetails.Extensions["traceId"] = context.HttpContext.TraceIdentifier;
+        if (context.Exception is BadHttpRequestException or ServerBusyException)
+        {
+            context.ProblemDetails.Detail = context.Exception.Message;
+        }
+
+        if (context.Exception is ServerBusyException busy)
+        {
+            context.HttpContext.Response.Headers.RetryAfter = busy.RetryAfter.TotalSeconds.ToString("0", CultureInfo.InvariantCulture);
+        }
+    }
 }

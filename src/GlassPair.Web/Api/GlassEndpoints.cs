@@ -9,14 +9,23 @@ namespace GlassPair.Web.Api;
 /// <summary>Tells what glasses there are, and their values.</summary>
 internal static class GlassEndpoints
 {
-    /// <summary>The most glasses in one answer.</summary>
-    internal const int MostGlasses = 2_000;
+    private static readonly QueryParameter StockId = new("stock", QueryKind.Text, "The stock's id; left out, the default stock.");
+    private static readonly QueryParameter Maker = new("maker", QueryKind.Words, "Makers to keep, separated by commas; left out, all.");
+    private static readonly QueryParameter SupplyStates = new("supply", QueryKind.Words, "Supply states to keep, separated by commas: recommended, listed, onRequest, unconfirmed, discontinued; left out, all.");
+    private static readonly QueryParameter Search = new("search", QueryKind.Text, "Text that maker/name holds.");
+    private static readonly QueryParameter Take = new("take", QueryKind.Whole, "How many glasses to answer with.", 1, 2_000, Usual: 100);
+    private static readonly QueryParameter Skip = new("skip", QueryKind.Whole, "How many matching glasses to leave out first.", 0, 1_000_000);
+    private static readonly QueryParameter Nm = new(
+        "nm", QueryKind.Numbers, "Wavelengths, nm, separated by commas, 1 to 1,000 of them.", Wavelength.MinNanometers, Wavelength.MaxNanometers, 1_000, IsRequired: true);
 
-    /// <summary>How many glasses an answer holds where the client does not say.</summary>
-    internal const int UsualGlasses = 100;
+    /// <summary>Gets the parameters of <see cref="ListGlasses"/>.</summary>
+    public static QueryParameter[] ListParameters { get; } = [StockId, Maker, SupplyStates, Search, Take, Skip];
 
-    /// <summary>The most wavelengths in one question.</summary>
-    internal const int MostWavelengths = 1_000;
+    /// <summary>Gets the parameters of <see cref="ShowGlass"/>.</summary>
+    public static QueryParameter[] GlassParameters { get; } = [StockId];
+
+    /// <summary>Gets the parameters of <see cref="ShowIndex"/>.</summary>
+    public static QueryParameter[] IndexParameters { get; } = [Nm, StockId];
 
     /// <summary>Lists the stocks served.</summary>
     public static Results<Ok<StockJson[]>, ProblemHttpResult> ListStocks(HttpRequest request, StockLibrary library)
@@ -32,17 +41,17 @@ internal static class GlassEndpoints
     /// <remarks>Text parameters compare without regard to case.</remarks>
     public static Results<Ok<GlassPageJson>, ProblemHttpResult> ListGlasses(HttpRequest request, StockLibrary library)
     {
-        var query = new QueryReading(request.Query, "stock", "maker", "supply", "search", "take", "skip");
-        if (!library.TryFindStock(query.Text("stock"), out Stock? stock, out ProblemHttpResult? problem) && !query.Faults.Any)
+        var query = new QueryReading(request.Query, ListParameters);
+        if (!library.TryFindStock(query.Text(StockId), out Stock? stock, out ProblemHttpResult? problem) && !query.Faults.Any)
         {
             return problem;
         }
 
-        string[]? makers = query.Words("maker", (stock ?? library.Current).Glasses.Select(g => g.Maker).Distinct());
-        Supply[]? supply = query.Words<Supply>("supply");
-        string search = query.Text("search") ?? "";
-        int take = query.Whole("take", 1, MostGlasses, UsualGlasses);
-        int skip = query.Whole("skip", 0, int.MaxValue, 0);
+        string[]? makers = query.Words(Maker, (stock ?? library.Current).Glasses.Select(g => g.Maker).Distinct());
+        Supply[]? supply = query.Words<Supply>(SupplyStates);
+        string search = query.Text(Search) ?? "";
+        int take = query.Whole(Take);
+        int skip = query.Whole(Skip);
         if (query.Faults.Any || stock is null)
         {
             return Problems.Faulty(query.Faults);
@@ -61,7 +70,7 @@ internal static class GlassEndpoints
     /// <remarks>404 lists the closest names where the stock has no such glass.</remarks>
     public static Results<Ok<GlassJson>, ProblemHttpResult> ShowGlass(string maker, string name, HttpRequest request, StockLibrary library)
     {
-        var query = new QueryReading(request.Query, "stock");
+        var query = new QueryReading(request.Query, GlassParameters);
         return TryFind(maker, name, query, library, out Glass? glass, out ProblemHttpResult? problem) ? TypedResults.Ok(new GlassJson(glass!)) : problem!;
     }
 
@@ -69,8 +78,8 @@ internal static class GlassEndpoints
     /// <remarks>422 names glass, wavelength, and range where the glass has no index.</remarks>
     public static Results<Ok<IndexJson>, ProblemHttpResult> ShowIndex(string maker, string name, HttpRequest request, StockLibrary library)
     {
-        var query = new QueryReading(request.Query, "stock", "nm");
-        double[] nm = query.Numbers("nm", Wavelength.MinNanometers, Wavelength.MaxNanometers, MostWavelengths);
+        var query = new QueryReading(request.Query, IndexParameters);
+        double[] nm = query.Numbers(Nm);
         if (!TryFind(maker, name, query, library, out Glass? glass, out ProblemHttpResult? problem))
         {
             return problem!;
@@ -87,7 +96,7 @@ internal static class GlassEndpoints
         string maker, string name, QueryReading query, StockLibrary library, out Glass? glass, out ProblemHttpResult? problem)
     {
         glass = null;
-        string? id = query.Text("stock");
+        string? id = query.Text(StockId);
         if (query.Faults.Any)
         {
             problem = Problems.Faulty(query.Faults);

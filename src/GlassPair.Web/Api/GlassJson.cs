@@ -6,12 +6,13 @@ namespace GlassPair.Web.Api;
 /// <summary>A glass: values computed from its coefficients, and what the catalogue says of it. What the catalogue does not say is null.</summary>
 public sealed record GlassJson
 {
+    private readonly FormulaJson _formula;
+
     /// <summary>Writes a glass.</summary>
     public GlassJson(Glass glass)
     {
         (Maker, Name) = (glass.Maker, glass.Name);
-        Form = FormOf(glass.Formula);
-        Coefficients = [.. glass.Formula.Coefficients];
+        _formula = new FormulaJson(glass.Formula);
         RangeNm = Problems.RangeNm(glass.Range);
         Nd = IndexOf(glass, SpectralLine.HeliumD);
         Ne = IndexOf(glass, SpectralLine.MercuryE);
@@ -30,6 +31,7 @@ public sealed record GlassJson
         DensityGPerCm3 = glass.DensityGramsPerCm3;
         Stated = glass.Stated;
         Resistance = glass.Resistance;
+        Fit = glass.Fit is { } fit ? new FitJson(fit) : null;
     }
 
     /// <summary>Gets the maker.</summary>
@@ -41,10 +43,13 @@ public sealed record GlassJson
     public string Name { get; }
 
     /// <summary>Gets the form of the dispersion formula.</summary>
-    public DispersionForm Form { get; }
+    public DispersionForm Form => _formula.Form;
 
-    /// <summary>Gets the coefficients, wavelengths in micrometers: B₁, C₁, B₂, C₂, … of the Sellmeier form; a₀, then the rest in falling exponent of the power series.</summary>
-    public double[] Coefficients { get; }
+    /// <summary>Gets the coefficients, wavelengths in micrometers: B₁, C₁, B₂, C₂, … of the Sellmeier form; a₀, then one for each of <c>exponents</c> of the power series.</summary>
+    public double[] Coefficients => _formula.Coefficients;
+
+    /// <summary>Gets the exponents of the power series; null for the Sellmeier form.</summary>
+    public int[]? Exponents => _formula.Exponents;
 
     /// <summary>Gets the shortest and longest wavelength for which the formula holds, nm.</summary>
     public double[] RangeNm { get; }
@@ -100,20 +105,10 @@ public sealed record GlassJson
     /// <summary>Gets the maker's resistance classes; the tests differ between makers.</summary>
     public ResistanceClasses Resistance { get; }
 
-    private static DispersionForm FormOf(DispersionFormula formula) =>
-        formula is SellmeierFormula ? DispersionForm.Sellmeier : DispersionForm.PowerSeries;
+    /// <summary>Gets the fit behind the formula where the maker states measured indices only.</summary>
+    public FitJson? Fit { get; }
 
     private static double? IndexOf(Glass glass, SpectralLine line) => glass.Range.Contains(line.Wavelength) ? glass.IndexAt(line.Wavelength) : null;
-}
-
-/// <summary>The form of a dispersion formula.</summary>
-public enum DispersionForm
-{
-    /// <summary>n² − 1 = Σ Bᵢ λ²/(λ² − Cᵢ).</summary>
-    Sellmeier,
-
-    /// <summary>n² = a₀ + Σ aₑ λᵉ.</summary>
-    PowerSeries,
 }
 
 /// <summary>A part of the glasses that match a search.</summary>

@@ -48,6 +48,12 @@ public static class Problems
         statusCode: StatusCodes.Status422UnprocessableEntity,
         extensions: [new("reason", outcome.Reason), new("largestAirSpaceMm", outcome.LargestAirSpace)]);
 
+    /// <summary>422: no sound formula fits the measured indices.</summary>
+    public static ProblemHttpResult NoFit(string sentence) => TypedResults.Problem(
+        title: "No sound formula fits these indices.",
+        detail: sentence,
+        statusCode: StatusCodes.Status422UnprocessableEntity);
+
     /// <summary>Gets the ends of a range, nm.</summary>
     internal static double[] RangeNm(WavelengthRange range) => [range.Shortest.Nanometers, range.Longest.Nanometers];
 

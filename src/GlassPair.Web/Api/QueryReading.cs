@@ -13,19 +13,26 @@ public sealed class QueryReading
     /// <summary>Starts to read.</summary>
     /// <param name="query">What the client sent.</param>
     /// <param name="known">The parameters that there are.</param>
-    public QueryReading(IQueryCollection query, params string[] known)
+    public QueryReading(IQueryCollection query, params QueryParameter[] known)
     {
         _query = query;
         foreach (string name in query.Keys)
         {
-            if (!known.Contains(name))
+            if (!known.Any(p => p.Name == name))
             {
-                Faults.Add(Shown(name), known.Length > 0 ? $"Unknown parameter. Known here: {string.Join(", ", known)}." : "Unknown parameter. There are none here.");
+                Faults.Add(
+                    StrictJson.Shown(name),
+                    known.Length > 0 ? $"Unknown parameter. Known here: {string.Join(", ", known.Select(p => p.Name))}." : "Unknown parameter. There are none here.");
             }
             else if (query[name].Count > 1)
             {
                 Faults.Add(name, "Stands more than once.");
             }
+        }
+
+        foreach (QueryParameter parameter in known.Where(p => p.IsRequired && Raw(p) is null))
+        {
+            Faults.Add(parameter.Name, "Missing; the parameter is required.");
         }
     }
 
@@ -33,9 +40,9 @@ public sealed class QueryReading
     public FieldFaults Faults { get; } = new();
 
     /// <summary>Gets a text; null where it is left out or faulty.</summary>
-    public string? Text(string name)
+    public string? Text(QueryParameter parameter)
     {
-        if (Raw(name) is not { } text)
+        if (Raw(parameter) is not { } text)
         {
             return null;
         }
@@ -45,49 +52,48 @@ public sealed class QueryReading
             return text;
         }
 
-        Faults.Add(name, FormattableString.Invariant($"Must be a text of at most {StrictJson.LongestText} characters without control characters."));
+        Faults.Add(parameter.Name, FormattableString.Invariant($"Must be a text of at most {StrictJson.LongestText} characters without control characters."));
         return null;
     }
 
     /// <summary>Gets a whole number, or the usual value where it is left out or faulty.</summary>
-    public int Whole(string name, int minimum, int maximum, int usual)
+    public int Whole(QueryParameter parameter)
     {
-        if (Raw(name) is not { } text)
+        if (Raw(parameter) is not { } text)
         {
-            return usual;
+            return parameter.Usual;
         }
 
-        if (int.TryParse(text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out int value) && value >= minimum && value <= maximum)
+        if (int.TryParse(text, NumberStyles.AllowLeadingSign, CultureInfo.InvariantCulture, out int value) && value >= parameter.Minimum && value <= parameter.Maximum)
         {
             return value;
         }
 
-        Faults.Add(name, FormattableString.Invariant($"Must be a whole number from {minimum} to {maximum}. Given: {Shown(text)}."));
-        return usual;
+        Faults.Add(parameter.Name, $"{parameter.Allowed} Given: {StrictJson.Shown(text)}.");
+        return parameter.Usual;
     }
 
     /// <summary>Gets a number; null where it is left out or faulty.</summary>
-    public double? Number(string name, double minimum, double maximum) =>
-        Raw(name) is { } text ? NumberIn(name, text, minimum, maximum) : null;
+    public double? Number(QueryParameter parameter) => Raw(parameter) is { } text ? NumberIn(parameter, parameter.Name, text) : null;
 
-    /// <summary>Gets numbers separated by commas, at least one; empty where one is faulty.</summary>
-    public double[] Numbers(string name, double minimum, double maximum, int most)
+    /// <summary>Gets numbers separated by commas; empty where they are left out or one is faulty.</summary>
+    public double[] Numbers(QueryParameter parameter)
     {
-        string[] texts = Raw(name)?.Split(',', StringSplitOptions.TrimEntries) ?? [];
-        if (texts.Length == 0 || texts.Length > most)
+        string[] texts = Raw(parameter)?.Split(',', StringSplitOptions.TrimEntries) ?? [];
+        if (texts.Length > parameter.Most)
         {
-            Faults.Add(name, FormattableString.Invariant($"Must hold 1 to {most} numbers separated by commas; it holds {texts.Length}."));
+            Faults.Add(parameter.Name, FormattableString.Invariant($"Must hold at most {parameter.Most} numbers separated by commas; it holds {texts.Length}."));
             return [];
         }
 
-        double?[] values = [.. texts.Select((t, i) => NumberIn(FormattableString.Invariant($"{name}[{i}]"), t, minimum, maximum))];
+        double?[] values = [.. texts.Select((t, i) => NumberIn(parameter, FormattableString.Invariant($"{parameter.Name}[{i}]"), t))];
         return values.Contains(null) ? [] : [.. values.Select(v => v!.Value)];
     }
 
     /// <summary>Gets words separated by commas, out of those allowed; null where the parameter is left out or faulty.</summary>
-    public string[]? Words(string name, IEnumerable<string> allowed)
+    public string[]? Words(QueryParameter parameter, IEnumerable<string> allowed)
     {
-        if (Raw(name) is not { } text)
+        if (Raw(parameter) is not { } text)
         {
             return null;
         }
@@ -98,27 +104,25 @@ public sealed class QueryReading
             return words;
         }
 
-        Faults.Add(name, $"Must hold words out of {string.Join(", ", allowed)}, separated by commas. Given: {Shown(text)}.");
+        Faults.Add(parameter.Name, $"Must hold words out of {string.Join(", ", allowed)}, separated by commas. Given: {StrictJson.Shown(text)}.");
         return null;
     }
 
     /// <summary>Gets words of an enumeration separated by commas; null where the parameter is left out or faulty.</summary>
-    public T[]? Words<T>(string name)
+    public T[]? Words<T>(QueryParameter parameter)
         where T : struct, Enum =>
-        Words(name, StrictJson.WordsOf(typeof(T)))?.Select(w => Enum.Parse<T>(w, ignoreCase: true)).ToArray();
+        Words(parameter, StrictJson.WordsOf(typeof(T)))?.Select(w => Enum.Parse<T>(w, ignoreCase: true)).ToArray();
 
-    private string? Raw(string name) => _query[name] is [{ Length: > 0 } text] ? text : null;
+    private string? Raw(QueryParameter parameter) => _query[parameter.Name] is [{ Length: > 0 } text] ? text : null;
 
-    private double? NumberIn(string path, string text, double minimum, double maximum)
+    private double? NumberIn(QueryParameter parameter, string path, string text)
     {
-        if (double.TryParse(text, Decimal, CultureInfo.InvariantCulture, out double value) && value >= minimum && value <= maximum)
+        if (double.TryParse(text, Decimal, CultureInfo.InvariantCulture, out double value) && value >= parameter.Minimum && value <= parameter.Maximum)
         {
             return value;
         }
 
-        Faults.Add(path, StrictJson.RangeSentence(minimum, maximum) + $" Given: {Shown(text)}.");
+        Faults.Add(path, $"{parameter.Allowed} Given: {StrictJson.Shown(text)}.");
         return null;
     }
-
-    private static string Shown(string text) => StrictJson.Shown(text);
 }

@@ -13,7 +13,7 @@ public static class Startup
     /// <summary>The address where no other is set.</summary>
     public const string UsualAddress = "http://localhost:5080";
 
-    /// <summary>Keeps the host from logging why it could not start, which <see cref="RunToEndAsync"/> says in words.</summary>
+    /// <summary>Keeps the host from logging why it could not start, which <see cref="Explain"/> says in words.</summary>
     public static IServiceCollection AddWordsAtStart(this IServiceCollection services)
     {
         services.AddOptions<LoggerFilterOptions>().Configure<IServiceProvider>((options, provider) => options.Rules.Add(new LoggerFilterRule(
@@ -24,34 +24,26 @@ public static class Startup
         return services;
     }
 
-    /// <summary>Runs the site until it is stopped; 0 after a regular stop, 1 where it could not start.</summary>
-    public static async Task<int> RunToEndAsync(this WebApplication app)
+    /// <summary>Says why the site cannot start; null where words cannot say it.</summary>
+    public static string? Explain(Exception problem) => problem switch
     {
-        try
-        {
-            _ = app.Services.GetRequiredService<StockLibrary>();
-            await app.StartAsync();
-        }
-        catch (IOException problem) when (problem.InnerException is AddressInUseException or SocketException)
-        {
-            await Console.Error.WriteLineAsync(
-                $"GlassPair cannot start: {problem.Message} Stop the other program, or choose another address with --urls http://localhost:5081");
-            return 1;
-        }
+        IOException { InnerException: AddressInUseException or SocketException } =>
+            $"GlassPair cannot start: {problem.Message} Stop the other program, or choose another address with --urls http://localhost:5081",
+        OptionsValidationException => $"GlassPair cannot start: its settings are wrong. {problem.Message}",
+        _ => null,
+    };
 
-        catch (OptionsValidationException problem)
-        {
-            await Console.Error.WriteLineAsync($"GlassPair cannot start: its settings are wrong. {problem.Message}");
-            return 1;
-        }
-
+    /// <summary>Runs the site until it is stopped.</summary>
+    public static async Task RunToEndAsync(this WebApplication app)
+    {
+        _ = app.Services.GetRequiredService<StockLibrary>();
+        await app.StartAsync();
         foreach (string address in app.Services.GetRequiredService<IServer>().Features.Get<IServerAddressesFeature>()?.Addresses ?? [])
         {
             Console.WriteLine($"GlassPair is ready: open {Readable(address)}");
         }
 
         await app.WaitForShutdownAsync();
-        return 0;
     }
 
     private static string Readable(string address) => address
