@@ -9,7 +9,7 @@ export async function open(id, frameId, dotNet) {
   await made(plot);
   const chart = {
     plot, dotNet, frame: document.getElementById(frameId), tip: plot.closest('.plot-picture').querySelector('.plot-tip'),
-    colors: new Map(), traces: [], figure: null, serial: 0, zoomed: null, drawn: Promise.resolve(), size: '', pointed: { kind: 0, index: -1 }, reporting: false,
+    colors: new Map(), traces: [], figure: null, serial: 0, zoomed: null, drawn: Promise.resolve(), pointed: { kind: 0, index: -1 }, reporting: false,
   };
   charts.set(id, chart);
   plot.on('plotly_relayout', e => {
@@ -93,18 +93,21 @@ function queue(chart, step) {
 async function draw(chart) {
   await Plotly.react(chart.plot, chart.traces.map(trace => traceOf(chart, trace)), layoutOf(chart), config);
   await drawShapes(chart); // labels are placed by the axes just drawn
+  await fit(chart); // the page may have moved since the chart was made
 }
 
 const drawShapes = chart => Plotly.relayout(chart.plot, { shapes: shapesOf(chart) });
 
 function resize(chart) {
-  const size = `${chart.plot.clientWidth} ${chart.plot.clientHeight}`;
-  if (!chart.figure || size === chart.size || !chart.plot.clientWidth) return;
-  chart.size = size;
-  queue(chart, async () => {
-    await Plotly.Plots.resize(chart.plot);
-    await drawShapes(chart);
-  });
+  if (chart.figure) queue(chart, () => fit(chart));
+}
+
+/** Makes the picture as large as its frame. */
+async function fit(chart) {
+  const { clientWidth: width, clientHeight: height, _fullLayout: drawn } = chart.plot;
+  if (width === 0 || (width === drawn.width && height === drawn.height)) return;
+  await Plotly.Plots.resize(chart.plot);
+  await drawShapes(chart);
 }
 
 // --- color scheme
@@ -163,12 +166,12 @@ function layoutOf(chart) {
   const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
   const [ink, quiet, grid, line, pane] = ['--ink', '--ink-2', '--grid', '--line-strong', '--pane'].map(token => paint(chart, token));
   const ranges = chart.zoomed ?? [chart.figure.x, chart.figure.y].map(axis => [axis.from, axis.to]);
-  const axis = (of, range) => ({
-    title: { text: of.title, font: { size }, standoff: 6 }, range, tickformat: of.format || undefined, tickfont: { size }, nticks: 8,
+  const axis = (of, range, length) => ({
+    title: { text: of.title, font: { size }, standoff: 6 }, range, tickformat: of.format || undefined, tickfont: { size }, nticks: clamp(Math.round(length), 3, 9),
     gridcolor: grid, linecolor: line, showline: true, zeroline: true, zerolinecolor: line, zerolinewidth: 1, ticks: 'outside', ticklen: 3, tickcolor: line, color: quiet, automargin: true,
   });
   return {
-    xaxis: axis(chart.figure.x, ranges[0]), yaxis: axis(chart.figure.y, ranges[1]),
+    xaxis: axis(chart.figure.x, ranges[0], chart.plot.clientWidth / 70), yaxis: axis(chart.figure.y, ranges[1], chart.plot.clientHeight / 40),
     font: { family: style.fontFamily, size, color: quiet }, paper_bgcolor: pane, plot_bgcolor: pane,
     margin: { l: 44, r: 8, t: 6, b: 32 }, showlegend: false, autosize: true,
     dragmode: chart.frame.tabIndex === 0 && !isCoarse() ? 'zoom' : false,
