@@ -74,12 +74,12 @@ public sealed class RequirementReading
     {
         if (state.Include.Concat(state.Exclude).FirstOrDefault(id => !stock.TryFind(id, out _)) is { } unknown)
         {
-            return $"{NumberText.Shorten(unknown)} is not in this stock: take it off the list.";
+            return $"{TypedNumber.Shorten(unknown)} is not in this stock: take it off the list.";
         }
 
         if (state.Include.Intersect(state.Exclude).FirstOrDefault() is { } both)
         {
-            return $"{NumberText.Shorten(both)} is both demanded and excluded: take it off one of the lists.";
+            return $"{TypedNumber.Shorten(both)} is both demanded and excluded: take it off one of the lists.";
         }
 
         return state.Makers is { IsEmpty: true } && state.Include.IsEmpty ? "No maker is kept: choose at least one."
@@ -101,17 +101,17 @@ public sealed class RequirementReading
         {
             _numbers[field] = line.Wavelength.Nanometers;
         }
-        else if (!NumberText.TryRead(text, out double value, out string? problem))
+        else if (!TypedNumber.TryRead(text, out double value, out string? problem))
         {
             _problems[field] = $"{problem} Allowed: {field.AllowedRange}.";
         }
         else if (!(value >= field.Min && value <= field.Max))
         {
-            _problems[field] = Text($"{NumberText.Shorten(text.Trim())} is too {(value > field.Max ? "large" : "small")}. Allowed: {field.AllowedRange}.");
+            _problems[field] = Text($"{TypedNumber.Shorten(text.Trim())} is too {(value > field.Max ? "large" : "small")}. Allowed: {field.AllowedRange}.");
         }
         else if (field == NumberField.Samples && value != Math.Floor(value))
         {
-            _problems[field] = $"{NumberText.Shorten(text.Trim())} is not a whole number. Allowed: {field.AllowedRange}.";
+            _problems[field] = $"{TypedNumber.Shorten(text.Trim())} is not a whole number. Allowed: {field.AllowedRange}.";
         }
         else
         {

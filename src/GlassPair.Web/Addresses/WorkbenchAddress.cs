@@ -103,7 +103,7 @@ public static class WorkbenchAddress
         {
             if (!_known.Contains(key, StringComparer.OrdinalIgnoreCase))
             {
-                notices.Add($"The address holds “{NumberText.Shorten(key)}”, which means nothing here; it was left out.");
+                notices.Add($"The address holds “{TypedNumber.Shorten(key)}”, which means nothing here; it was left out.");
             }
             else if (values.Count > 1)
             {
@@ -115,7 +115,7 @@ public static class WorkbenchAddress
         {
             notices.Add(int.TryParse(format, NumberStyles.None, CultureInfo.InvariantCulture, out int newer) && newer > Format
                 ? $"This link was written by a newer GlassPair (format {Whole(newer)}; this one reads {Whole(Format)}). What is understood is shown."
-                : $"The link's format “{NumberText.Shorten(format)}” is not known; it was read as format {Whole(Format)}.");
+                : $"The link's format “{TypedNumber.Shorten(format)}” is not known; it was read as format {Whole(Format)}.");
         }
 
         WorkbenchState state = WorkbenchState.Empty;
@@ -180,7 +180,7 @@ public static class WorkbenchAddress
                 }
             }
 
-            notices.Add($"“{NumberText.Shorten(text)}” is no choice for “{key}”; the usual one is shown.");
+            notices.Add($"“{TypedNumber.Shorten(text)}” is no choice for “{key}”; the usual one is shown.");
             return usual;
         }
 
@@ -191,16 +191,16 @@ public static class WorkbenchAddress
                 return usual;
             }
 
-            if (!NumberText.TryRead(text, out double value, out _))
+            if (!TypedNumber.TryRead(text, out double value, out _))
             {
-                notices.Add($"“{NumberText.Shorten(text)}” is no number for “{key}”; {Whole(usual)} is used.");
+                notices.Add($"“{TypedNumber.Shorten(text)}” is no number for “{key}”; {Whole(usual)} is used.");
                 return usual;
             }
 
             int kept = (int)Math.Clamp(Math.Floor(value), 1.0, most);
             if (kept != value)
             {
-                notices.Add($"“{key}” takes whole numbers from 1 to {Whole(most)}; {Whole(kept)} is used instead of {NumberText.Shorten(text)}.");
+                notices.Add($"“{key}” takes whole numbers from 1 to {Whole(most)}; {Whole(kept)} is used instead of {TypedNumber.Shorten(text)}.");
             }
 
             return kept;
@@ -217,7 +217,7 @@ public static class WorkbenchAddress
                 }
                 else
                 {
-                    notices.Add($"“{NumberText.Shorten(word)}” is no supply state; it was left out.");
+                    notices.Add($"“{TypedNumber.Shorten(word)}” is no supply state; it was left out.");
                 }
             }
 
@@ -263,7 +263,7 @@ public static class WorkbenchAddress
 
             if (key is not null)
             {
-                notices.Add($"“{NumberText.Shorten(column)}” is no column for “{key}”; it was left out.");
+                notices.Add($"“{TypedNumber.Shorten(column)}” is no column for “{key}”; it was left out.");
             }
 
             return null;

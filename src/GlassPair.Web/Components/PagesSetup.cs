@@ -16,6 +16,7 @@ public static class PagesSetup
     {
         // The policy of the security headers covers frames.
         app.MapRazorComponents<App>().AddInteractiveServerRenderMode(options => options.ContentSecurityFrameAncestorsPolicy = null);
+        Pages.WorkbenchExport.Map(app);
         return app;
     }
 }

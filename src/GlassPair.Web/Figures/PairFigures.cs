@@ -16,7 +16,7 @@ public static class PairFigures
         Requirement requirement = solution.Requirement;
         Band band = requirement.Band;
         int digits = MicrometerDecimals(requirement);
-        string n = FNumber(requirement.FNumber);
+        string n = "f/" + Plain(requirement.FNumber);
         (string p, string m) = (pair.Positive.Glass.Name, pair.Negative.Glass.Name);
         string samples = $"{band.Samples.Length} samples from {band.ShortEnd} to {band.LongEnd}, λₘ = {band.Design}";
         string both = $"{p}, {m}";

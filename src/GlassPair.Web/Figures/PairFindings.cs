@@ -23,7 +23,7 @@ public static class PairFindings
         int digits = MicrometerDecimals(requirement);
         string half = Fixed(0.5e3 * pair.PeakToValley, digits);
         string depth = Fixed(1e3 * requirement.DepthOfFocus, digits);
-        string n = FNumber(requirement.FNumber);
+        string n = "f/" + Plain(requirement.FNumber);
         string limit = FNumber(pair.ColorLimitedFNumber);
         return pair.Verdict switch
         {

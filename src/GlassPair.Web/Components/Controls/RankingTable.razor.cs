@@ -93,7 +93,7 @@ public sealed partial class RankingTable : ComponentBase
         Shown = State.Columns is { } keys ? [.. RankingColumn.All.Where(c => keys.Contains(c.Key))] : RankingColumn.Usual;
         Columns =
         [
-            new DataColumn<RankedPair>("rank", "#", "", "Rank for the requirement; P pins the row in focus.", RankCell, true, true, "rank"),
+            new DataColumn<RankedPair>("rank", "#", "", "Rank for the requirement; P pins the row in focus.", RankCell, true, true, "place"),
             new DataColumn<RankedPair>("positive", "Positive", "", "The glass of positive power.", PositiveCell, false, false),
             new DataColumn<RankedPair>("negative", "Negative", "", "The glass of negative power.", NameCell(p => p.Negative.Glass), false, false, "c2"),
             .. Shown.Select(c => new DataColumn<RankedPair>(c.Key, c.Title, c.Unit, c.Meaning, CellOf(c), c.Value is not null, c.Value is not null && c.Key is not (RankingColumn.BarKey or RankingColumn.SupplyKey), ClassOf(c))),

@@ -1,4 +1,5 @@
 using System.Collections.Immutable;
+using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
 using GlassPair.Web.Addresses;
@@ -37,6 +38,9 @@ public sealed partial class RequirementForm : ComponentBase
     /// <summary>Gets or sets the makers of the stock.</summary>
     [Parameter, EditorRequired] public required IReadOnlyList<string> Makers { get; set; }
 
+    /// <summary>Gets or sets the glasses of the stock.</summary>
+    [Parameter, EditorRequired] public required IReadOnlyList<Glass> Glasses { get; set; }
+
     /// <summary>Called with the new state at each keystroke.</summary>
     [Parameter] public EventCallback<WorkbenchState> Typed { get; set; }
 
@@ -50,9 +54,12 @@ public sealed partial class RequirementForm : ComponentBase
         get
         {
             string typed = State.TextOf(NumberField.AbbeTolerance);
-            return _grades.Any(g => g.Value == typed) ? _grades : _grades.Append((typed, $"±{NumberText.Shorten(typed)} %"));
+            return _grades.Any(g => g.Value == typed) ? _grades : _grades.Append((typed, $"±{TypedNumber.Shorten(typed)} %"));
         }
     }
+
+    private static ImmutableSortedSet<string> Add(ImmutableSortedSet<string> set, string id) =>
+        set.Count < WorkbenchState.MaxNamedGlasses ? set.Add(id) : set;
 
     private static string Derived(double? value, double scale, int decimals) =>
         value is { } v ? FigureText.Fixed(v * scale, decimals) : RankingColumn.Unknown;

@@ -1,4 +1,3 @@
-using System.Globalization;
 using System.Collections.Immutable;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
@@ -48,28 +47,11 @@ public sealed partial class Workbench : ComponentBase
 
     private Glass? ChosenGlass => _state.ChosenGlass is { } id && Stock.TryFind(id, out Glass? glass) ? glass : null;
 
-    private string AskedFor => _reading.Request is { } request
-        ? $"{FigureText.Plain(request.Requirement.FocalLength)} mm {FigureText.FNumber(request.Requirement.FNumber)}"
-        : "No requirement yet";
+    private string AskedFor => _reading.Request is { } request ? RequirementText.NameOf(request.Requirement) : "No requirement yet";
 
-    private string AskedDetails
-    {
-        get
-        {
-            if (_reading.Request is not { Requirement: var requirement })
-            {
-                return "";
-            }
+    private string AskedDetails => _reading.Request is { } request ? RequirementText.DetailsOf(request.Requirement) : "";
 
-            string band = $"{requirement.Band.ShortEnd.Nanometers.ToString("0", CultureInfo.InvariantCulture)}–{requirement.Band.LongEnd.Nanometers.ToString("0", CultureInfo.InvariantCulture)} nm";
-            string halfField = requirement.HalfFieldDegrees > 0.0 ? $", ±{FigureText.Plain(requirement.HalfFieldDegrees)}°" : "";
-            string build = requirement.AirSpace is { } space ? $", air-spaced {FigureText.Plain(space)} mm" : ", cemented";
-            string temperature = requirement.Temperature is { } span ? $", {FigureText.Plain(span.FromCelsius)} to {FigureText.Plain(span.ToCelsius)} °C" : "";
-            return band + halfField + build + temperature;
-        }
-    }
-
-    private string Title => (_reading.Request is null ? "" : $"{AskedFor}, {AskedDetails.Split(',')[0]}")
+    private string Title => (_reading.Request is null ? "" : $"{AskedFor}, {RequirementText.Of(_reading.Request.Requirement.Band)}")
         + (_chosen is null ? "" : $": {_chosen.Positive.Glass.Name} + {_chosen.Negative.Glass.Name}") is { Length: > 0 } text ? text + " · GlassPair" : "GlassPair";
 
     private string Description => _answer is null || _chosen is null

@@ -54,7 +54,7 @@ public sealed class WorkbenchAnswer
         {
             if (!Stock.TryFind(id, out Optics.Glasses.Glass? glass))
             {
-                problem = $"{NumberText.Shorten(id)} is not in this stock.";
+                problem = $"{TypedNumber.Shorten(id)} is not in this stock.";
                 return null;
             }
 

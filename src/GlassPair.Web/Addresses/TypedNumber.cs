@@ -3,7 +3,7 @@ using System.Globalization;
 namespace GlassPair.Web.Addresses;
 
 /// <summary>Reads numbers as people type them, and says what is wrong with those that are none.</summary>
-public static class NumberText
+public static class TypedNumber
 {
     private const NumberStyles Allowed = NumberStyles.AllowLeadingSign | NumberStyles.AllowDecimalPoint | NumberStyles.AllowExponent;
     private const int LongestShown = 40;
