@@ -29,6 +29,8 @@ public sealed partial class Workbench : ComponentBase
     private Candidate? _pointedAt;
     private string? _failure;
     private bool _stale;
+    private ImmutableArray<WorkbenchRelaxation> _relaxations = [];
+    private ImmutableArray<(string Sentence, long? Holding)> _costs = [];
     private string _shownQuery = "";
     private CancellationTokenSource _work = new();
     private CancellationTokenSource _addressWork = new();
@@ -194,14 +196,15 @@ public sealed partial class Workbench : ComponentBase
             return;
         }
 
-        if (Answers.Find(_state, Stock) is { } kept)
-        {
-            Show(kept);
-            return;
-        }
-
         try
         {
+            if (Answers.Find(_state, Stock) is { } kept)
+            {
+                Show(kept);
+                await CountCostsAsync(kept, cancellation);
+                return;
+            }
+
             await Task.Delay(pause, cancellation);
             Task<WorkbenchAnswer> work = Answers.AnswerAsync(_state, request, Stock, cancellation);
             if (await Task.WhenAny(work, Task.Delay(_patience, cancellation)) != work && !cancellation.IsCancellationRequested)
@@ -210,7 +213,9 @@ public sealed partial class Workbench : ComponentBase
                 StateHasChanged();
             }
 
-            Show(await work);
+            WorkbenchAnswer answer = await work;
+            Show(answer);
+            await CountCostsAsync(answer, cancellation);
         }
         catch (OperationCanceledException)
         {
@@ -227,6 +232,22 @@ public sealed partial class Workbench : ComponentBase
         (_answer, _stale, _failure) = (answer, false, null);
         Choose();
     }
+
+    /// <summary>Where no pair holds, counts what each limit costs, one after the other.</summary>
+    private async Task CountCostsAsync(WorkbenchAnswer answer, CancellationToken cancellation)
+    {
+        _relaxations = answer.Shortlist.CombinationsHolding == 0 ? WorkbenchRelaxation.Of(_state, answer) : [];
+        _costs = [.. _relaxations.Select(r => (r.Sentence, (long?)null))];
+        for (int i = 0; i < _relaxations.Length && RendererInfo.IsInteractive; i++)
+        {
+            StateHasChanged();
+            long? holding = await Answers.CountHoldingAsync(_relaxations[i].State, answer.Stock, cancellation);
+            _costs = _costs.SetItem(i, (_relaxations[i].Sentence, holding));
+        }
+    }
+
+    private Task RelaxAsync(string sentence) =>
+        _relaxations.FirstOrDefault(r => r.Sentence == sentence) is { } relaxation ? PickAsync(relaxation.State) : Task.CompletedTask;
 
     /// <summary>Finds the chosen and the pinned pair in the answer shown.</summary>
     private void Choose()

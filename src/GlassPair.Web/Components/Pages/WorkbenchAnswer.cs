@@ -11,16 +11,13 @@ namespace GlassPair.Web.Components.Pages;
 /// <summary>A ranking as the working page shows it. Immutable; shared between the circuits that ask the same.</summary>
 public sealed class WorkbenchAnswer
 {
-    /// <summary>Makes the answer to a state from its ranking.</summary>
-    public WorkbenchAnswer(WorkbenchState state, ShortlistAnswer ranked, IndexTable table)
+    /// <summary>Makes the answer from a ranking.</summary>
+    public WorkbenchAnswer(ShortlistAnswer ranked, IndexTable table)
     {
-        (State, Stock, Shortlist, Elapsed, Table) = (state, ranked.Stock, ranked.Shortlist, ranked.Elapsed, table);
+        (Stock, Shortlist, Elapsed, Table) = (ranked.Stock, ranked.Shortlist, ranked.Elapsed, table);
         Pairs = [.. Shortlist.Candidates.Select(c => new RankedPair(c.Solution, Shortlist.Request.Quality, c))];
         Ties = Shortlist.Request.RankBy == RankBy.SecondarySpectrum ? [] : Optics.Rankings.Ties.Of(Shortlist.Candidates, Shortlist.Request.Quality);
     }
-
-    /// <summary>Gets the state that was asked.</summary>
-    public WorkbenchState State { get; }
 
     /// <summary>Gets the stock.</summary>
     public Stock Stock { get; }

@@ -31,7 +31,7 @@ public sealed class WorkbenchAnswers(ShortlistService shortlists)
         }
 
         ShortlistAnswer ranked = await shortlists.RankAsync(stock, request, cancellation).ConfigureAwait(false);
-        var answer = new WorkbenchAnswer(state, ranked, shortlists.TableOf(stock, request.Requirement.Band));
+        var answer = new WorkbenchAnswer(ranked, shortlists.TableOf(stock, request.Requirement.Band));
         if (_kept.TryAdd(key, answer))
         {
             _order.Enqueue(key);
@@ -43,6 +43,12 @@ public sealed class WorkbenchAnswers(ShortlistService shortlists)
 
         return answer;
     }
+
+    /// <summary>Counts the pairs that hold for a state; null where the state cannot be ranked.</summary>
+    public async Task<long?> CountHoldingAsync(WorkbenchState state, Stock stock, CancellationToken cancellation) =>
+        RequirementReading.Of(state, stock).Request is { } request
+            ? (await shortlists.RankAsync(stock, request with { Take = 1 }, cancellation).ConfigureAwait(false)).Shortlist.CombinationsHolding
+            : null;
 
     private static string KeyOf(WorkbenchState state, Stock stock) => stock.Id + WorkbenchAddress.Write(state.ForRanking() with { StockId = null });
 }
