@@ -7,7 +7,7 @@ document.addEventListener('keydown', event => {
   if (event.ctrlKey || event.altKey || event.metaKey) return;
   const box = event.target.closest?.('[data-rows]');
   if (box && event.key in steps && event.target.closest('tbody, [data-rows]')) {
-    const here = event.target.closest('tbody button');
+    const here = event.target.closest('tbody :is(button, a)');
     if (!here && event.target !== box) return;
     event.preventDefault();
     moveRow(box, here, steps[event.key]);
@@ -27,7 +27,7 @@ function moveRow(box, here, step) {
 function seek(box, index, direction, tries) {
   const last = Number(box.querySelector('table').getAttribute('aria-rowcount'));
   const row = box.querySelector(`tbody tr[aria-rowindex="${index}"]`);
-  const button = row?.querySelector('button');
+  const button = row?.querySelector('button, a');
   if (button) {
     button.focus({ preventScroll: true });
     reveal(box, row);

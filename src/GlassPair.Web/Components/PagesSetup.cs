@@ -14,6 +14,7 @@ public static class PagesSetup
     /// <summary>Maps the pages.</summary>
     public static WebApplication MapGlassPairPages(this WebApplication app)
     {
+        app.MapGet("/export/glasses.csv", Glasses.GlassListCsv.Answer).ExcludeFromDescription();
         // The policy of the security headers covers frames.
         app.MapRazorComponents<App>().AddInteractiveServerRenderMode(options => options.ContentSecurityFrameAncestorsPolicy = null);
         Pages.WorkbenchExport.Map(app);

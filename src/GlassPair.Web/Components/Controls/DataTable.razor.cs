@@ -22,7 +22,7 @@ public sealed partial class DataTable<TItem> : ComponentBase
     /// <summary>Gets or sets the columns in order.</summary>
     [Parameter, EditorRequired] public required IReadOnlyList<DataColumn<TItem>> Columns { get; set; }
 
-    /// <summary>Gets or sets the key of the column that names a row; its cells are the rows' buttons.</summary>
+    /// <summary>Gets or sets the key of the column that names a row; its cells are the rows' buttons or links.</summary>
     [Parameter, EditorRequired] public required string RowHeader { get; set; }
 
     /// <summary>Gets or sets what tells one row from another.</summary>
@@ -30,6 +30,9 @@ public sealed partial class DataTable<TItem> : ComponentBase
 
     /// <summary>Gets or sets a row's name in full.</summary>
     [Parameter, EditorRequired] public required Func<TItem, string> NameOf { get; set; }
+
+    /// <summary>Gets or sets where the name of a row leads; null makes it a button that chooses the row.</summary>
+    [Parameter] public Func<TItem, string>? AddressOf { get; set; }
 
     /// <summary>Gets or sets rows that stay on top for comparison.</summary>
     [Parameter] public IReadOnlyList<TItem> Pinned { get; set; } = [];

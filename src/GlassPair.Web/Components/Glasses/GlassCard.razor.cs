@@ -1,0 +1,10 @@
+using Microsoft.AspNetCore.Components;
+
+namespace GlassPair.Web.Components.Glasses;
+
+/// <summary>The glass that is chosen in the list: what it is, what was noticed about it, and where one can go with it.</summary>
+public sealed partial class GlassCard : ComponentBase
+{
+    /// <summary>Gets or sets the glass; null where none is chosen.</summary>
+    [Parameter] public GlassFigures? Figures { get; set; }
+}
