@@ -21,7 +21,7 @@ public sealed class QueryReader
         {
             if (!known.Contains(key, StringComparer.OrdinalIgnoreCase))
             {
-                Notice($"The address holds “{NumberText.Shorten(key)}”, which means nothing here; it was left out.");
+                Notice($"The address holds “{TypedNumber.Shorten(key)}”, which means nothing here; it was left out.");
             }
             else if (values.Count > 1)
             {
@@ -41,7 +41,7 @@ public sealed class QueryReader
         {
             Notice(int.TryParse(text, NumberStyles.None, CultureInfo.InvariantCulture, out int other) && other > format
                 ? $"This link was written by a newer GlassPair (format {text}; this one reads {mine}). What is understood is shown."
-                : $"The link's format “{NumberText.Shorten(text)}” is not known; it was read as format {mine}.");
+                : $"The link's format “{TypedNumber.Shorten(text)}” is not known; it was read as format {mine}.");
         }
     }
 
@@ -99,7 +99,7 @@ public sealed class QueryReader
             }
         }
 
-        Notice($"“{NumberText.Shorten(text)}” is no choice for “{key}”; the usual one is shown.");
+        Notice($"“{TypedNumber.Shorten(text)}” is no choice for “{key}”; the usual one is shown.");
         return usual;
     }
 }

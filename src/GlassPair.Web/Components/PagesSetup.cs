@@ -14,10 +14,10 @@ public static class PagesSetup
     /// <summary>Maps the pages.</summary>
     public static WebApplication MapGlassPairPages(this WebApplication app)
     {
-        app.MapGet("/export/glasses.csv", Glasses.GlassListCsv.Answer).ExcludeFromDescription();
         // The policy of the security headers covers frames.
         app.MapRazorComponents<App>().AddInteractiveServerRenderMode(options => options.ContentSecurityFrameAncestorsPolicy = null);
         Pages.WorkbenchExport.Map(app);
+        Glasses.GlassListCsv.Map(app);
         return app;
     }
 }

@@ -55,12 +55,12 @@ public static class FitAddress
 
         double? NanometersOf(string text)
         {
-            if (NumberText.TryRead(text, out double value, out _) && value > 0.0)
+            if (TypedNumber.TryRead(text, out double value, out _) && value > 0.0)
             {
                 return value;
             }
 
-            reader.Notice($"“{NumberText.Shorten(text)}” is no wavelength to leave out.");
+            reader.Notice($"“{TypedNumber.Shorten(text)}” is no wavelength to leave out.");
             return null;
         }
 
@@ -77,7 +77,7 @@ public static class FitAddress
                 return terms;
             }
 
-            reader.Notice(string.Create(CultureInfo.InvariantCulture, $"“terms” takes 1 to {most}, not “{NumberText.Shorten(text)}”; the best number is found."));
+            reader.Notice(string.Create(CultureInfo.InvariantCulture, $"“terms” takes 1 to {most}, not “{TypedNumber.Shorten(text)}”; the best number is found."));
             return null;
         }
     }
@@ -90,7 +90,7 @@ public static class FitAddress
         .Add("unit", WordOf(_units, state.Table.Unit))
         .Add("form", WordOf(_forms, state.Form))
         .Add("terms", state.Form is null ? null : state.Terms?.ToString(CultureInfo.InvariantCulture))
-        .AddList("out", state.LeftOut.IsEmpty ? null : state.LeftOut.Select(NumberText.Write))
+        .AddList("out", state.LeftOut.IsEmpty ? null : state.LeftOut.Select(TypedNumber.Write))
         .Add("name", state.Name)
         .ToString();
 

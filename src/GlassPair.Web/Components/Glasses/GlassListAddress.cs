@@ -73,7 +73,7 @@ public static class GlassListAddress
                 }
             }
 
-            reader.Notice($"“{NumberText.Shorten(word)}” is no supply state; it was left out.");
+            reader.Notice($"“{TypedNumber.Shorten(word)}” is no supply state; it was left out.");
             return null;
         }
 
@@ -89,7 +89,7 @@ public static class GlassListAddress
                 return (column.Key, text[0] == '-');
             }
 
-            reader.Notice($"“{NumberText.Shorten(text)}” is no column to sort by; the list stands in the order of names.");
+            reader.Notice($"“{TypedNumber.Shorten(text)}” is no column to sort by; the list stands in the order of names.");
             return (null, false);
         }
     }

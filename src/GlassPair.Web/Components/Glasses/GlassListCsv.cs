@@ -36,24 +36,16 @@ public static class GlassListCsv
         ("remarks", g => string.Join(" ", g.Remarks)),
     ];
 
-    /// <summary>Answers the address of an export: the query is that of the list.</summary>
-    public static IResult Answer(HttpRequest request, StockLibrary library)
-    {
-        GlassListState state = GlassListAddress.Read(request.QueryString.ToString()).State;
-        Stock stock = state.StockId is { } id && library.TryFind(id, out Stock? found) ? found : library.Current;
-        var content = new MemoryStream();
-        Write(content, stock, state);
-        content.Position = 0;
-        return Results.File(content, "text/csv; charset=utf-8", $"glasses-{stock.Id}.csv");
-    }
+    /// <summary>Maps <c>/export/glasses.csv</c>; its query is that of the list.</summary>
+    public static void Map(IEndpointRouteBuilder routes) => routes.MapGet("/export/glasses.csv", Answer).ExcludeFromDescription();
 
     /// <summary>Writes the glasses that a state shows, in its order.</summary>
     public static void Write(Stream stream, Stock stock, GlassListState state)
     {
         using CsvWriter writer = CsvWriter.Create(stream, _options, leaveOpen: true);
-        writer.WriteComment($"Stock: {stock.Title}, {FigureText.Count(stock.Glasses.Length)} glasses, {stock.Id}");
-        writer.WriteComment($"Asked for: {GlassListAddress.Write(state with { StockId = stock.Id, Chosen = null })}");
-        writer.WriteComment("Indices, Abbe numbers and partial dispersions are computed from the coefficients. Supply is as the makers' lists said: confirm with the maker.");
+        writer.WriteComment($" Stock: {stock.Title}, {FigureText.Count(stock.Glasses.Length)} glasses, {stock.Id}");
+        writer.WriteComment($" Asked for: {GlassListAddress.Write(state with { StockId = stock.Id, Chosen = null })}");
+        writer.WriteComment(" Indices, Abbe numbers and partial dispersions are computed from the coefficients. Supply is as the makers' lists said: confirm with the maker.");
         writer.WriteHeader([.. _columns.Select(c => c.Heading)]);
         foreach (GlassFigures figures in GlassListView.Of(GlassFigures.Of(stock), state))
         {
@@ -64,5 +56,15 @@ public static class GlassListCsv
 
             writer.EndRecord();
         }
+    }
+
+    private static IResult Answer(HttpRequest request, StockLibrary library)
+    {
+        GlassListState state = GlassListAddress.Read(request.QueryString.ToString()).State;
+        Stock stock = state.StockId is { } id && library.TryFind(id, out Stock? found) ? found : library.Current;
+        var content = new MemoryStream();
+        Write(content, stock, state);
+        content.Position = 0;
+        return Results.File(content, "text/csv; charset=utf-8", $"glasses-{stock.Id}.csv");
     }
 }

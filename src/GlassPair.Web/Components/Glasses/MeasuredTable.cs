@@ -59,7 +59,7 @@ public sealed record MeasuredTable(ImmutableArray<MeasuredRow> Rows, TableForm F
         Dictionary<double, int> seen = [];
         foreach ((int line, string raw, NumberPair pair) in read)
         {
-            rows.Add(RowOf(line, NumberText.Shorten(raw), pair, unit, seen));
+            rows.Add(RowOf(line, TypedNumber.Shorten(raw), pair, unit, seen));
         }
 
         return new MeasuredTable(rows.MoveToImmutable(), form, NotesOn(lines, form, asked), null);
@@ -178,7 +178,7 @@ public sealed record MeasuredTable(ImmutableArray<MeasuredRow> Rows, TableForm F
         notes.Add($"Read as: {how}{(asked.IsOpen ? "" : " (as far as chosen by you)")}.");
         if (lines.Header is { } header)
         {
-            notes.Add($"Line {header.Number.ToString(CultureInfo.InvariantCulture)} was taken for the heading: “{NumberText.Shorten(header.Text)}”.");
+            notes.Add($"Line {header.Number.ToString(CultureInfo.InvariantCulture)} was taken for the heading: “{TypedNumber.Shorten(header.Text)}”.");
         }
 
         if (lines.Skipped > 0)

@@ -101,7 +101,7 @@ internal readonly record struct NumberPair(double First, double Second, string? 
 
     /// <summary>Tells whether a text is a number with a decimal point or a decimal comma.</summary>
     public static bool LooksLikeNumber(string text) =>
-        NumberText.TryRead(text, out _, out _) || (IsOneComma(text) && NumberText.TryRead(text.Replace(',', '.'), out _, out _));
+        TypedNumber.TryRead(text, out _, out _) || (IsOneComma(text) && TypedNumber.TryRead(text.Replace(',', '.'), out _, out _));
 
     private static bool IsOneComma(string text) => text.Count(c => c == ',') == 1 && !text.Contains('.', StringComparison.Ordinal);
 
@@ -118,7 +118,7 @@ internal readonly record struct NumberPair(double First, double Second, string? 
     private static string? TryNumber(Field field, TableForm form, out double value)
     {
         string text = field.Text;
-        string shown = NumberText.Shorten(text);
+        string shown = TypedNumber.Shorten(text);
         value = 0.0;
         if (text.Length == 0)
         {
@@ -139,11 +139,11 @@ internal readonly record struct NumberPair(double First, double Second, string? 
         if (form.Mark == DecimalMark.Comma)
         {
             return hasPoint ? $"“{shown}” has a decimal point, the table has decimal commas."
-                : NumberText.TryRead(text.Replace(',', '.'), out value, out _) && IsOneCommaOrNone(text) ? null
+                : TypedNumber.TryRead(text.Replace(',', '.'), out value, out _) && IsOneCommaOrNone(text) ? null
                 : NotANumber(shown);
         }
 
-        return !hasComma ? NumberText.TryRead(text, out value, out _) ? null : NotANumber(shown)
+        return !hasComma ? TypedNumber.TryRead(text, out value, out _) ? null : NotANumber(shown)
             : field.IsQuoted && IsOneComma(text) ? $"“{shown}” has a comma inside quotation marks. If it stands before the decimals, choose “decimal comma”."
             : IsOneComma(text) ? $"“{shown}” has a decimal comma, the table has decimal points."
             : NotANumber(shown);

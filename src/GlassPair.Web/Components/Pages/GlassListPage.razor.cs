@@ -89,7 +89,7 @@ public sealed partial class GlassListPage : ComponentBase
             }
             else
             {
-                _notices = _notices.Add($"The stock {NumberText.Shorten(id)} of this link is no longer served; today’s is shown.");
+                _notices = _notices.Add($"The stock {TypedNumber.Shorten(id)} of this link is no longer served; today’s is shown.");
                 _state = _state with { StockId = null };
             }
         }
@@ -99,7 +99,7 @@ public sealed partial class GlassListPage : ComponentBase
         Editions = string.Join(", ", Stock.Glasses.Select(g => g.Edition).OfType<string>().Distinct().Order(StringComparer.Ordinal));
         if (_state.Chosen is { } chosen && !Stock.TryFind(chosen, out _))
         {
-            _notices = _notices.Add($"{NumberText.Shorten(chosen)} is not in this stock.");
+            _notices = _notices.Add($"{TypedNumber.Shorten(chosen)} is not in this stock.");
         }
 
         Show();
