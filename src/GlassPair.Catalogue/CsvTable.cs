@@ -81,7 +81,7 @@ internal sealed class CsvTable
 
         if (blank + text.Comments > 0)
         {
-            issues.Note(text.File, 0, $"Skipped: {blank} rows without a value, {text.Comments} comment lines.");
+            issues.Note(text.File, 0, $"Skipped rows without a value: {blank}; comment lines: {text.Comments}.");
         }
 
         if (rows.Count == 0 && issues.Errors == errorsBefore)

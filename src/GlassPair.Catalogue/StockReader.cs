@@ -31,11 +31,6 @@ public static class StockReader
             issues.Error("", 0, "The catalogue's folder does not exist or cannot be read.");
         }
 
-        if (files.Count == 0 && issues.Errors == 0)
-        {
-            issues.Error("", 0, "The catalogue's folder has no CSV file.");
-        }
-
         return Read(files, title, issues);
     }
 
@@ -48,6 +43,11 @@ public static class StockReader
 
     private static StockReading Read(List<CatalogueFile> files, string title, IssueList issues)
     {
+        if (files.Count == 0 && issues.Errors == 0)
+        {
+            issues.Error("", 0, "The catalogue has no CSV file.");
+        }
+
         if (files.Count > CatalogueFolder.MostFiles)
         {
             issues.Error("", 0, $"More than {CatalogueFolder.MostFiles} files, the limit.");
