@@ -19,12 +19,14 @@ internal sealed partial class StockWatcher(StockLibrary library, IOptions<StockO
         using FileSystemWatcher? events = TryWatch();
         while (!stoppingToken.IsCancellationRequested)
         {
-            await WaitForLookAsync(lookEvery, stoppingToken).ConfigureAwait(false);
+            // Looks before it waits: the folder may have changed since the library read it.
             if (library.NeedsReading)
             {
                 await WaitUntilStillAsync(stoppingToken).ConfigureAwait(false);
                 Reload();
             }
+
+            await WaitForLookAsync(lookEvery, stoppingToken).ConfigureAwait(false);
         }
     }
 
