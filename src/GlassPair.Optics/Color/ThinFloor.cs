@@ -9,20 +9,7 @@ internal static class ThinFloor
     /// <summary>(σ_V/V)² G + σ_n²/(n − 1)², with G the weighted variance of t over the band; per square of the focal length.</summary>
     public static double Of(GlassIndices glass, Band band, DataQuality quality)
     {
-        double mean = 0.0;
-        for (int i = 0; i < glass.Changes.Length; i++)
-        {
-            mean += band.Samples[i].Weight * glass.Changes[i];
-        }
-
-        double variance = 0.0;
-        for (int i = 0; i < glass.Changes.Length; i++)
-        {
-            double off = glass.Changes[i] - mean;
-            variance += band.Samples[i].Weight * off * off;
-        }
-
         double precision = quality.IndexPrecision / (glass.DesignIndex - 1.0);
-        return (quality.AbbeTolerance * quality.AbbeTolerance * variance) + (precision * precision);
+        return (quality.AbbeTolerance * quality.AbbeTolerance * band.VarianceOf(glass.Changes.AsSpan())) + (precision * precision);
     }
 }

@@ -40,20 +40,7 @@ public sealed record ThinSolution : ThinOutcome
         FocalShifts = [.. Enumerable.Range(0, requirement.Band.Samples.Length).Select(i => Shift([.. elements.Select(e => e.Changes[i])]))];
         ShortShift = Shift([.. elements.Select(e => e.ShortChange)]);
         LongShift = Shift([.. elements.Select(e => e.LongChange)]);
-        double mean = 0.0;
-        for (int i = 0; i < FocalShifts.Length; i++)
-        {
-            mean += requirement.Band.Samples[i].Weight * FocalShifts[i];
-        }
-
-        double variance = 0.0;
-        for (int i = 0; i < FocalShifts.Length; i++)
-        {
-            double off = FocalShifts[i] - mean;
-            variance += requirement.Band.Samples[i].Weight * off * off;
-        }
-
-        RmsFocalShift = Math.Sqrt(variance);
+        RmsFocalShift = Math.Sqrt(requirement.Band.VarianceOf(FocalShifts.AsSpan()));
     }
 
     /// <summary>Gets what was asked for.</summary>

@@ -6,6 +6,9 @@ namespace GlassPair.Optics.Color;
 /// <summary>Powers of two thin elements, in contact or air-spaced, that bring a band to one focus.</summary>
 public static class ThinPair
 {
+    /// <summary>Between this share of the largest air space and the whole, the band may have no least residual though its ends can be united.</summary>
+    internal const double SureAirSpace = 0.999;
+
     /// <summary>Solves the pair in the order in which light meets it.</summary>
     public static ThinOutcome Solve(Requirement requirement, GlassIndices front, GlassIndices rear)
     {
@@ -17,7 +20,7 @@ public static class ThinPair
         };
         if (power is not { } first || !(Math.Abs(first) <= ThinSolution.LargestPower))
         {
-            return Explain(requirement, front, rear, space);
+            return Explain(requirement, front, rear);
         }
 
         // Σ yᵢ φᵢ = Φ with y₂ = 1 − δ p₁
@@ -31,6 +34,9 @@ public static class ThinPair
         double root = 1.0 - Math.Sqrt(rearAbbe / frontAbbe);
         return focalLength * Math.Min(1.0, root * root);
     }
+
+    /// <summary>Tells whether an air space is why a pair has no solution; equal Abbe numbers, whose largest is zero, have none in contact either.</summary>
+    internal static bool IsTooLarge(double airSpace, double largest) => largest > 0.0 && airSpace > SureAirSpace * largest;
 
     /// <summary>p₁ of the classical achromat: the root of δ p² − (1 − V₂/V₁ + δ) p + 1 = 0 that goes over to V₁/(V₁ − V₂) in contact; null where none is real.</summary>
     internal static double? EndsUnited(double frontAbbe, double rearAbbe, double space)
@@ -48,14 +54,8 @@ public static class ThinPair
     /// <summary>p₁ of least variance of p₁ t₁ + y₂² p₂ t₂ over the samples; null where there is no such minimum near the achromat.</summary>
     internal static double? BandBalanced(GlassIndices front, GlassIndices rear, Band band, double space)
     {
-        double frontMean = 0.0;
-        double rearMean = 0.0;
-        for (int i = 0; i < band.Samples.Length; i++)
-        {
-            frontMean += band.Samples[i].Weight * front.Changes[i];
-            rearMean += band.Samples[i].Weight * rear.Changes[i];
-        }
-
+        double frontMean = band.MeanOf(front.Changes.AsSpan());
+        double rearMean = band.MeanOf(rear.Changes.AsSpan());
         double g11 = 0.0;
         double g12 = 0.0;
         double g22 = 0.0;
@@ -113,13 +113,13 @@ public static class ThinPair
         return p;
     }
 
-    private static NoThinSolution Explain(Requirement requirement, GlassIndices front, GlassIndices rear, double space)
+    private static NoThinSolution Explain(Requirement requirement, GlassIndices front, GlassIndices rear)
     {
         double largest = LargestAirSpace(requirement.FocalLength, front.AbbeNumber, rear.AbbeNumber);
-        return space > 0.0 && requirement.AirSpace > largest * 0.999
+        return IsTooLarge(requirement.AirSpace.GetValueOrDefault(), largest)
             ? new NoThinSolution(
                 NoThinSolutionReason.AirSpaceTooLarge,
-                FormattableString.Invariant($"{front.Glass.Id} and {rear.Glass.Id} cannot be balanced {requirement.AirSpace:0.###} mm apart: the largest air space for them is {largest:0.###} mm."),
+                FormattableString.Invariant($"{front.Glass.Id} and {rear.Glass.Id} cannot be balanced {requirement.AirSpace:0.###} mm apart: the largest air space for them is {largest:G4} mm."),
                 largest)
             : new NoThinSolution(
                 NoThinSolutionReason.DispersionsAlike,

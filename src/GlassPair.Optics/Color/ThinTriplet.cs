@@ -52,12 +52,7 @@ public static class ThinTriplet
 
     private static double[] Deviations(GlassIndices glass, Band band)
     {
-        double mean = 0.0;
-        for (int i = 0; i < band.Samples.Length; i++)
-        {
-            mean += band.Samples[i].Weight * glass.Changes[i];
-        }
-
+        double mean = band.MeanOf(glass.Changes.AsSpan());
         return [.. band.Samples.Select((s, i) => Math.Sqrt(s.Weight) * (glass.Changes[i] - mean))];
     }
 

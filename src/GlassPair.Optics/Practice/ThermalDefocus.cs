@@ -122,9 +122,7 @@ public sealed record ThermalDefocus(
             requirement.FocalLength * (ImageDistance([.. solution.Elements.Select((e, i) => solution.RelativePowers[i] * PowerRatio(e.Glass, band.Design, wavelength, celsius))], space * growth) - detector);
 
         double[] defocus = [.. band.Samples.Select(s => DefocusAt(s.Wavelength))];
-        double mean = band.Samples.Select((s, i) => s.Weight * defocus[i]).Sum();
-        double variance = band.Samples.Select((s, i) => s.Weight * (defocus[i] - mean) * (defocus[i] - mean)).Sum();
-        return new ThermalState(celsius, DefocusAt(band.Design), Math.Sqrt(variance));
+        return new ThermalState(celsius, DefocusAt(band.Design), Math.Sqrt(band.VarianceOf(defocus)));
     }
 
     /// <summary>The power of an element at a wavelength and temperature in units of that at the design wavelength and 20 °C: (n − 1) over that there, over the growth of its radii.</summary>

@@ -123,10 +123,10 @@ internal sealed class PairScreen
             Vector<long> unsolved = ~Vector.Equals(p1, p1);
             if (_airSpace > 0.0 && (open & unsolved) != Vector<long>.Zero)
             {
-                // ThinPair.LargestAirSpace
+                // ThinPair.LargestAirSpace and IsTooLarge
                 Vector<double> root = Vector<double>.One - Vector.SquareRoot(new Vector<double>(_glasses.Abbe, rear) / new Vector<double>(_glasses.Abbe[front]));
                 Vector<double> largest = _request.Requirement.FocalLength * Vector.Min(Vector<double>.One, root * root);
-                Drop(ref open, ref counts.AirSpace, unsolved & Vector.GreaterThan(new Vector<double>(_airSpace), largest * 0.999));
+                Drop(ref open, ref counts.AirSpace, unsolved & Vector.GreaterThan(largest, Vector<double>.Zero) & Vector.GreaterThan(new Vector<double>(_airSpace), ThinPair.SureAirSpace * largest));
             }
 
             Drop(ref open, ref counts.DispersionsAlike, unsolved);
@@ -197,7 +197,7 @@ internal sealed class PairScreen
         if (double.IsNaN(p1))
         {
             double largest = ThinPair.LargestAirSpace(_request.Requirement.FocalLength, _glasses.Abbe[front], _glasses.Abbe[rear]);
-            return _airSpace > 0.0 && _airSpace > largest * 0.999 ? PairDropReason.AirSpace : PairDropReason.DispersionsAlike;
+            return ThinPair.IsTooLarge(_airSpace, largest) ? PairDropReason.AirSpace : PairDropReason.DispersionsAlike;
         }
 
         return Math.Max(Math.Abs(p1), Math.Abs(_row.RearPower[rear])) > _powerLimit ? PairDropReason.ElementPower : null;

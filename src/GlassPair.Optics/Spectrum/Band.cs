@@ -98,6 +98,35 @@ public sealed class Band : IEquatable<Band>
         return new Band(shortEnd, design, longEnd, [.. samples.Select(s => new BandSample(s.Wavelength, s.Weight / sum))], isEven: false);
     }
 
+    /// <summary>Gets the weighted mean of one value for each sample.</summary>
+    /// <exception cref="ArgumentException">There are more or fewer values than samples.</exception>
+    public double MeanOf(ReadOnlySpan<double> values)
+    {
+        Guard.SameLength(Samples.Length, values.Length);
+        double mean = 0.0;
+        for (int i = 0; i < values.Length; i++)
+        {
+            mean += Samples[i].Weight * values[i];
+        }
+
+        return mean;
+    }
+
+    /// <summary>Gets the weighted variance of one value for each sample about their weighted mean.</summary>
+    /// <exception cref="ArgumentException">There are more or fewer values than samples.</exception>
+    public double VarianceOf(ReadOnlySpan<double> values)
+    {
+        double mean = MeanOf(values);
+        double variance = 0.0;
+        for (int i = 0; i < values.Length; i++)
+        {
+            double off = values[i] - mean;
+            variance += Samples[i].Weight * off * off;
+        }
+
+        return variance;
+    }
+
     /// <inheritdoc/>
     public bool Equals(Band? other) =>
         other is not null && ShortEnd == other.ShortEnd && Design == other.Design && LongEnd == other.LongEnd && Samples.SequenceEqual(other.Samples);
