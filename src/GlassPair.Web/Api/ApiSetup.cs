@@ -14,6 +14,9 @@ public static class ApiSetup
     /// <summary>Where the API lives.</summary>
     public const string Root = "/api";
 
+    /// <summary>What is said to a client that sends anything but JSON.</summary>
+    internal const string WrongContentType = "The body must be JSON: send it with the header Content-Type: application/json.";
+
     /// <summary>Adds what the API needs.</summary>
     public static IServiceCollection AddGlassPairApi(this IServiceCollection services, IConfiguration configuration)
     {
@@ -89,12 +92,17 @@ public static class ApiSetup
             .ProducesProblem(StatusCodes.Status415UnsupportedMediaType)
             .ProducesProblem(StatusCodes.Status422UnprocessableEntity);
 
-    /// <summary>Maps a route for one method; the others get 405 with words, also where a fallback route would catch them.</summary>
+    /// <summary>Maps a route for one method; what does not fit gets words, also where a fallback route would catch it.</summary>
     private static RouteHandlerBuilder Only(string method, RouteGroupBuilder group, string pattern, Delegate handler)
     {
-        group.Map(pattern, (HttpResponse response) =>
+        group.Map(pattern, (HttpContext context) =>
         {
-            response.Headers.Allow = method;
+            if (context.Request.Method == method)
+            {
+                return TypedResults.Problem(detail: WrongContentType, statusCode: StatusCodes.Status415UnsupportedMediaType);
+            }
+
+            context.Response.Headers.Allow = method;
             return TypedResults.Problem(detail: $"Use {method} here.", statusCode: StatusCodes.Status405MethodNotAllowed);
         }).ExcludeFromDescription();
         return group.MapMethods(pattern, [method], handler).WithName(handler.Method.Name);

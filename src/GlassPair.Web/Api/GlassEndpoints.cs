@@ -68,6 +68,10 @@ internal static class GlassEndpoints
 
     /// <summary>Shows one glass with values computed from its coefficients.</summary>
     /// <remarks>404 lists the closest names where the stock has no such glass.</remarks>
+    /// <param name="maker">The maker.</param>
+    /// <param name="name">The maker's name of the glass.</param>
+    /// <param name="request">The call.</param>
+    /// <param name="library">The stocks served.</param>
     public static Results<Ok<GlassJson>, ProblemHttpResult> ShowGlass(string maker, string name, HttpRequest request, StockLibrary library)
     {
         var query = new QueryReading(request.Query, GlassParameters);
@@ -76,6 +80,10 @@ internal static class GlassEndpoints
 
     /// <summary>Evaluates the index of one glass.</summary>
     /// <remarks>422 names glass, wavelength, and range where the glass has no index.</remarks>
+    /// <param name="maker">The maker.</param>
+    /// <param name="name">The maker's name of the glass.</param>
+    /// <param name="request">The call.</param>
+    /// <param name="library">The stocks served.</param>
     public static Results<Ok<IndexJson>, ProblemHttpResult> ShowIndex(string maker, string name, HttpRequest request, StockLibrary library)
     {
         var query = new QueryReading(request.Query, IndexParameters);

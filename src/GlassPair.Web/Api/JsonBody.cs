@@ -26,7 +26,7 @@ public sealed class JsonBody<T> : IBindableFromHttpContext<JsonBody<T>>, IEndpoi
     {
         if (!context.Request.HasJsonContentType())
         {
-            throw new BadHttpRequestException("The body must be JSON: send it with the header Content-Type: application/json.", StatusCodes.Status415UnsupportedMediaType);
+            throw new BadHttpRequestException(ApiSetup.WrongContentType, StatusCodes.Status415UnsupportedMediaType);
         }
 
         JsonSerializerOptions options = context.RequestServices.GetRequiredService<IOptions<JsonOptions>>().Value.SerializerOptions;

@@ -26,7 +26,7 @@ public static class Problems
     /// <summary>404: the stock has no such glasses; the closest names are listed.</summary>
     public static ProblemHttpResult UnknownGlasses(Stock stock, IReadOnlyList<string> ids)
     {
-        UnknownGlass[] unknown = [.. ids.Select(id => new UnknownGlass(id, ClosestGlasses.To(stock, id)))];
+        UnknownGlass[] unknown = [.. ids.Select(id => new UnknownGlass(StrictJson.Shown(id), ClosestGlasses.To(stock, id)))];
         return TypedResults.Problem(
             title: "Unknown glass.",
             detail: string.Join(" ", unknown.Select(u => $"The stock {stock.Id} has no glass {u.Glass}; the closest names are {string.Join(", ", u.Closest)}.")),

@@ -20,11 +20,6 @@ internal static class ShortlistEndpoint
     {
         (ShortlistRequestJson json, FieldFaults faults) = (body.Value, body.Faults);
         Requirement? requirement = RequirementReading.Read(json.Requirement, "requirement", faults);
-        if (json.Elements == 3)
-        {
-            SolutionEndpoints.CheckInContact(json.Requirement, faults);
-        }
-
         Stock? stock = null;
         ProblemHttpResult? problem = null;
         if (!faults.Concern("stock") && library.TryFindStock(json.Stock, out stock, out problem))

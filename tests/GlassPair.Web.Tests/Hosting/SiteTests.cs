@@ -70,6 +70,15 @@ public sealed class SiteTests(SiteFactory site) : IClassFixture<SiteFactory>
         Assert.Equal(HttpStatusCode.NotFound, answer.StatusCode);
     }
 
+    [Theory]
+    [InlineData("/api/v1/glasses/schott/%00")]
+    [InlineData("/%00")]
+    [InlineData("/api/v1/stocks?%00=%ff")]
+    public async Task Address_Malformed_IsABadRequest(string path)
+    {
+        Assert.Equal(HttpStatusCode.BadRequest, (await Get(path)).StatusCode);
+    }
+
     [Fact]
     public async Task Https_WhereSet_IsAskedForAndKept()
     {
