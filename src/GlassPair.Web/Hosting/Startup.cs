@@ -3,6 +3,7 @@ using GlassPair.Web.Stocks;
 using Microsoft.AspNetCore.Connections;
 using Microsoft.AspNetCore.Hosting.Server;
 using Microsoft.AspNetCore.Hosting.Server.Features;
+using Microsoft.AspNetCore.Http.Features;
 using Microsoft.Extensions.Options;
 
 namespace GlassPair.Web.Hosting;
@@ -16,11 +17,10 @@ public static class Startup
     /// <summary>Keeps the host from logging why it could not start, which <see cref="Explain"/> says in words.</summary>
     public static IServiceCollection AddWordsAtStart(this IServiceCollection services)
     {
-        services.AddOptions<LoggerFilterOptions>().Configure<IServiceProvider>((options, provider) => options.Rules.Add(new LoggerFilterRule(
-            providerName: null,
-            "Microsoft.Extensions.Hosting.Internal.Host",
-            logLevel: null,
-            (_, _, _) => provider.GetRequiredService<IHostApplicationLifetime>().ApplicationStarted.IsCancellationRequested)));
+        var progress = new Progress();
+        services.AddSingleton(progress);
+        services.Configure<LoggerFilterOptions>(options => options.Rules.Add(new LoggerFilterRule(
+            providerName: null, "Microsoft.Extensions.Hosting.Internal.Host", logLevel: null, (_, _, _) => progress.HasStarted)));
         return services;
     }
 
@@ -37,8 +37,11 @@ public static class Startup
     public static async Task RunToEndAsync(this WebApplication app)
     {
         _ = app.Services.GetRequiredService<StockLibrary>();
+        Progress progress = app.Services.GetRequiredService<Progress>();
+        IFeatureCollection server = app.Services.GetRequiredService<IServer>().Features;
         await app.StartAsync();
-        foreach (string address in app.Services.GetRequiredService<IServer>().Features.Get<IServerAddressesFeature>()?.Addresses ?? [])
+        progress.HasStarted = true;
+        foreach (string address in server.Get<IServerAddressesFeature>()?.Addresses ?? [])
         {
             Console.WriteLine($"GlassPair is ready: open {Readable(address)}");
         }
@@ -50,4 +53,9 @@ public static class Startup
         .Replace("//[::]", "//localhost", StringComparison.Ordinal)
         .Replace("//0.0.0.0", "//localhost", StringComparison.Ordinal)
         .Replace("//127.0.0.1", "//localhost", StringComparison.Ordinal);
+
+    private sealed class Progress
+    {
+        public volatile bool HasStarted;
+    }
 }
