@@ -64,17 +64,17 @@ public sealed record NumberField(string Key, string Label, string Unit, double M
 
     /// <summary>Lowest temperature.</summary>
     public static NumberField FromCelsius { get; } = new(
-        "from", "Coldest", "°C", -100.0, 150.0, "",
+        "from", "Coldest", "°C", -200.0, 500.0, "",
         "The temperatures that the lens must stand. Empty leaves temperature out.");
 
     /// <summary>Highest temperature.</summary>
     public static NumberField ToCelsius { get; } = new(
-        "to", "Hottest", "°C", -100.0, 150.0, "",
+        "to", "Hottest", "°C", -200.0, 500.0, "",
         "Not below the coldest.");
 
     /// <summary>Expansion of the housing.</summary>
     public static NumberField Housing { get; } = new(
-        "housing", "Housing expansion", "10⁻⁶/K", -10.0, 200.0, "23.6",
+        "housing", "Housing expansion", "10⁻⁶/K", -100.0, 1000.0, "23.6",
         "Of what holds lens and image apart: aluminum 23.6, steel about 11, titanium about 9, invar about 1.");
 
     /// <summary>Relative Abbe tolerance of the grade ordered.</summary>

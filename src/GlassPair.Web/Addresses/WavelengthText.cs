@@ -6,14 +6,21 @@ namespace GlassPair.Web.Addresses;
 /// <summary>Reads a wavelength as people type it: a number in nanometers, or a spectral line by name.</summary>
 public static class WavelengthText
 {
-    /// <summary>Gets the lines that can be named, in rising wavelength. Source: [spectral-lines].</summary>
+    /// <summary>Gets the lines that have a letter, in rising wavelength; the same as in <c>data/spectral-lines.csv</c>. Source: [spectral-lines].</summary>
     public static ImmutableArray<SpectralLine> Lines { get; } =
     [
         new("i", "mercury", Wavelength.FromNanometers(365.0146)),
         new("h", "mercury", Wavelength.FromNanometers(404.6561)),
-        SpectralLine.MercuryG, SpectralLine.CadmiumFPrime, SpectralLine.HydrogenF, SpectralLine.MercuryE, SpectralLine.HeliumD,
-        SpectralLine.CadmiumCPrime, SpectralLine.HydrogenC,
+        SpectralLine.MercuryG,
+        SpectralLine.CadmiumFPrime,
+        SpectralLine.HydrogenF,
+        SpectralLine.MercuryE,
+        SpectralLine.HeliumD,
+        new("D", "sodium", Wavelength.FromNanometers(589.2938)),
+        SpectralLine.CadmiumCPrime,
+        SpectralLine.HydrogenC,
         new("r", "helium", Wavelength.FromNanometers(706.5188)),
+        new("A'", "potassium", Wavelength.FromNanometers(768.2)),
         new("s", "cesium", Wavelength.FromNanometers(852.11)),
         new("t", "mercury", Wavelength.FromNanometers(1013.98)),
     ];

@@ -12,8 +12,9 @@ namespace GlassPair.Web.Addresses;
 
 /// <summary>What an address says.</summary>
 /// <param name="State">The state, with what could not be understood left at its default.</param>
+/// <param name="IsBlank">Whether it says nothing at all about the page, as on a first visit.</param>
 /// <param name="Notices">What was not understood, and what was done about it, as sentences.</param>
-public sealed record AddressReading(WorkbenchState State, ImmutableArray<string> Notices);
+public sealed record AddressReading(WorkbenchState State, bool IsBlank, ImmutableArray<string> Notices);
 
 /// <summary>Writes the working page's state as the query of its address, and reads it back.</summary>
 /// <remarks>
@@ -158,7 +159,7 @@ public static class WorkbenchAddress
             Axes = Word("map", MapAxes.PartialDispersion, ("partial", MapAxes.PartialDispersion), ("index", MapAxes.Index)),
             StockId = Text("stock") is { Length: > 0 } stock ? Cut(stock, NumberField.MaxLength) : null,
         };
-        return new AddressReading(state, notices.ToImmutable());
+        return new AddressReading(state, !pairs.Keys.Any(k => _known.Contains(k, StringComparer.OrdinalIgnoreCase)), notices.ToImmutable());
 
         string? Text(string key) => pairs.TryGetValue(key, out StringValues values) && values.Count > 0 ? values[0] ?? "" : null;
 

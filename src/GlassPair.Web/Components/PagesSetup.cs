@@ -1,3 +1,5 @@
+using GlassPair.Web.Addresses;
+
 namespace GlassPair.Web.Components;
 
 /// <summary>Registers and maps the pages.</summary>
@@ -7,6 +9,7 @@ public static class PagesSetup
     public static IServiceCollection AddGlassPairPages(this IServiceCollection services, IConfiguration configuration)
     {
         services.AddSingleton<Pages.WorkbenchAnswers>();
+        services.AddSingleton(_ => DemoRequirement.Read(Path.Combine(AppContext.BaseDirectory, "data", "demo", "requirement.json")));
         services.AddRazorComponents().AddInteractiveServerComponents();
         return services;
     }

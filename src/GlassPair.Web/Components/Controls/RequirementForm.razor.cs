@@ -33,7 +33,7 @@ public sealed partial class RequirementForm : ComponentBase
     [Parameter, EditorRequired] public required WorkbenchState State { get; set; }
 
     /// <summary>Gets or sets what it amounts to.</summary>
-    [Parameter, EditorRequired] public required RequirementReading Reading { get; set; }
+    [Parameter, EditorRequired] public required FormReading Reading { get; set; }
 
     /// <summary>Gets or sets the makers of the stock.</summary>
     [Parameter, EditorRequired] public required IReadOnlyList<string> Makers { get; set; }

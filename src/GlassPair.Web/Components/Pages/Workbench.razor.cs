@@ -1,9 +1,11 @@
 using System.Collections.Immutable;
+using System.Globalization;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
 using GlassPair.Web.Addresses;
 using GlassPair.Web.Figures;
+using GlassPair.Web.Hosting;
 using GlassPair.Web.Stocks;
 using GlassPair.Web.Work;
 using Microsoft.AspNetCore.Components;
@@ -20,7 +22,9 @@ public sealed partial class Workbench : ComponentBase
 
     private WorkbenchState _state = WorkbenchState.Empty;
     private ImmutableArray<string> _misread = [];
-    private RequirementReading _reading = null!;
+    private bool _isDemo;
+    private Stock _stock = null!;
+    private FormReading _reading = null!;
     private WorkbenchAnswer? _answer;
     private RankedPair? _chosen;
     private RankedPair? _pinned;
@@ -41,13 +45,15 @@ public sealed partial class Workbench : ComponentBase
 
     [Inject] private NavigationManager Navigation { get; set; } = null!;
 
-    private Stock Stock => _state.StockId is { } id && Library.TryFind(id, out Stock? stock) ? stock : Library.Current;
+    [Inject] private DemoRequirement Demo { get; set; } = null!;
 
-    private IReadOnlyList<string> Makers => [.. Stock.Glasses.Select(g => g.Maker).Distinct()];
+    [Inject] private CircuitPresence Presence { get; set; } = null!;
 
-    private string Link => Navigation.BaseUri + WorkbenchAddress.Write(_state with { StockId = _state.StockId ?? Stock.Id });
+    private IReadOnlyList<string> Makers => [.. _stock.Glasses.Select(g => g.Maker).Distinct()];
 
-    private Glass? ChosenGlass => _state.ChosenGlass is { } id && Stock.TryFind(id, out Glass? glass) ? glass : null;
+    private string Link => Navigation.BaseUri + WorkbenchAddress.Write(_state with { StockId = _stock.Id });
+
+    private Glass? ChosenGlass => _state.ChosenGlass is { } id && _stock.TryFind(id, out Glass? glass) ? glass : null;
 
     private string AskedFor => _reading.Request is { } request ? RequirementText.NameOf(request.Requirement) : "No requirement yet";
 
@@ -70,6 +76,25 @@ public sealed partial class Workbench : ComponentBase
     {
         get
         {
+            if (_isDemo)
+            {
+                yield return new Notice("info", $"This is an example: {Demo.Title}, an invented scenario. Change any value; the address keeps everything you set.", [("Start from an empty requirement", WorkbenchAddress.Write(WorkbenchState.Empty))]);
+            }
+
+            if (_state.StockId is { } asked && asked != _stock.Id)
+            {
+                yield return new Notice("tight", $"The stock {TypedNumber.Shorten(asked)} that this link was made on is not kept here. Shown is today’s, {_stock.Id}: ranks and figures can differ.", []);
+            }
+            else if (_stock.Id != Library.Current.Id)
+            {
+                yield return new Notice("info", $"This link was made on an older stock, {_stock.Id}, and shows what it showed then. Today’s is {Library.Current.Id}.", [("Rank again on today’s stock", WorkbenchAddress.Write(_state with { StockId = Library.Current.Id }))]);
+            }
+
+            if (Library.Problem is { } problem)
+            {
+                yield return new Notice("tight", string.Create(CultureInfo.InvariantCulture, $"The catalogue’s folder cannot be used since {problem.Since.UtcDateTime:yyyy-MM-dd HH:mm} UTC; the stock read before is served. {problem.Issues[0]}"), []);
+            }
+
             foreach (string sentence in _misread)
             {
                 yield return new Notice("tight", sentence, []);
@@ -89,11 +114,6 @@ public sealed partial class Workbench : ComponentBase
             {
                 yield return new Notice("exceeds", failure, []);
             }
-
-            if (_answer is not null && _reading.Request is null)
-            {
-                yield return new Notice("tight", $"The answer shown is for the last requirement that could be read.", []);
-            }
         }
     }
 
@@ -101,6 +121,8 @@ public sealed partial class Workbench : ComponentBase
     public void Dispose()
     {
         Navigation.LocationChanged -= OnLocationChanged;
+        Library.Changed -= OnStockChanged;
+        Presence.Returned -= OnReturned;
         _work.Cancel();
         _work.Dispose();
         _addressWork.Cancel();
@@ -111,6 +133,8 @@ public sealed partial class Workbench : ComponentBase
     protected override async Task OnInitializedAsync()
     {
         Navigation.LocationChanged += OnLocationChanged;
+        Library.Changed += OnStockChanged;
+        Presence.Returned += OnReturned;
         ReadAddress();
         await AnswerAsync(TimeSpan.Zero);
     }
@@ -118,9 +142,15 @@ public sealed partial class Workbench : ComponentBase
     private void ReadAddress()
     {
         _shownQuery = new Uri(Navigation.Uri).Query;
-        (_state, _misread) = WorkbenchAddress.Read(_shownQuery);
-        _reading = RequirementReading.Of(_state, Stock);
+        AddressReading read = WorkbenchAddress.Read(_shownQuery);
+        (_state, _misread, _isDemo) = (read.IsBlank ? Demo.State : read.State, read.Notices, read.IsBlank);
+        _stock = _state.StockId is { } id && Library.TryFind(id, out Stock? stock) ? stock : Library.Current;
+        _reading = FormReading.Of(_state, _stock);
     }
+
+    private void OnStockChanged() => _ = InvokeAsync(StateHasChanged);
+
+    private void OnReturned(object? sender, EventArgs e) => _ = InvokeAsync(() => AnswerAsync(TimeSpan.Zero));
 
     private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(async () =>
     {
@@ -159,9 +189,9 @@ public sealed partial class Workbench : ComponentBase
 
     private void Set(WorkbenchState next)
     {
-        _state = next with { StockId = next.StockId ?? Stock.Id };
-        _misread = [];
-        _reading = RequirementReading.Of(_state, Stock);
+        _state = next with { StockId = _stock.Id };
+        (_misread, _isDemo) = ([], false);
+        _reading = FormReading.Of(_state, _stock);
     }
 
     private async Task ReplaceAddressAsync()
@@ -198,7 +228,7 @@ public sealed partial class Workbench : ComponentBase
 
         try
         {
-            if (Answers.Find(_state, Stock) is { } kept)
+            if (Answers.Find(_state, _stock) is { } kept)
             {
                 Show(kept);
                 await CountCostsAsync(kept, cancellation);
@@ -206,7 +236,7 @@ public sealed partial class Workbench : ComponentBase
             }
 
             await Task.Delay(pause, cancellation);
-            Task<WorkbenchAnswer> work = Answers.AnswerAsync(_state, request, Stock, cancellation);
+            Task<WorkbenchAnswer> work = Answers.AnswerAsync(_state, request, _stock, cancellation);
             if (await Task.WhenAny(work, Task.Delay(_patience, cancellation)) != work && !cancellation.IsCancellationRequested)
             {
                 _stale = true;
@@ -264,11 +294,11 @@ public sealed partial class Workbench : ComponentBase
         _pointedAt = null;
     }
 
-    private static CancellationToken Restart(ref CancellationTokenSource source)
+    private CancellationToken Restart(ref CancellationTokenSource source)
     {
         source.Cancel();
         source.Dispose();
-        source = new CancellationTokenSource();
+        source = CancellationTokenSource.CreateLinkedTokenSource(Presence.WhilePresent);
         return source.Token;
     }
 

@@ -46,7 +46,7 @@ public sealed class WorkbenchAnswers(ShortlistService shortlists)
 
     /// <summary>Counts the pairs that hold for a state; null where the state cannot be ranked.</summary>
     public async Task<long?> CountHoldingAsync(WorkbenchState state, Stock stock, CancellationToken cancellation) =>
-        RequirementReading.Of(state, stock).Request is { } request
+        FormReading.Of(state, stock).Request is { } request
             ? (await shortlists.RankAsync(stock, request with { Take = 1 }, cancellation).ConfigureAwait(false)).Shortlist.CombinationsHolding
             : null;
 

@@ -50,7 +50,7 @@ public static class WorkbenchExport
         string query = context.Request.QueryString.Value ?? "";
         WorkbenchState state = WorkbenchAddress.Read(query).State;
         Stock stock = state.StockId is { } id && library.TryFind(id, out Stock? named) ? named : library.Current;
-        var reading = RequirementReading.Of(state, stock);
+        var reading = FormReading.Of(state, stock);
         if (reading.Request is not { } request)
         {
             string[] problems = [.. reading.Problems.Select(p => $"{p.Field.Label}: {p.Problem}"), .. reading.GlassProblem is { } glass ? new[] { glass } : []];

@@ -4,16 +4,17 @@ using GlassPair.Catalogue;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
+using GlassPair.Web.Api;
 
 namespace GlassPair.Web.Addresses;
 
 /// <summary>What the form amounts to: a request to rank, or what stands in the way of one.</summary>
-public sealed class RequirementReading
+public sealed class FormReading
 {
     private readonly Dictionary<NumberField, double> _numbers = [];
     private readonly Dictionary<NumberField, string> _problems = [];
 
-    private RequirementReading(WorkbenchState state, Stock stock)
+    private FormReading(WorkbenchState state, Stock stock)
     {
         foreach (NumberField field in NumberField.All)
         {
@@ -58,7 +59,7 @@ public sealed class RequirementReading
         NumberField.All.Where(_problems.ContainsKey).Select(f => (f, _problems[f]));
 
     /// <summary>Reads the form against a stock. Never throws.</summary>
-    public static RequirementReading Of(WorkbenchState state, Stock stock) => new(state, stock);
+    public static FormReading Of(WorkbenchState state, Stock stock) => new(state, stock);
 
     /// <summary>Gets what is wrong with a field, as a sentence that says what is allowed; null where nothing is.</summary>
     public string? ProblemWith(NumberField field) => _problems.GetValueOrDefault(field);
@@ -129,6 +130,11 @@ public sealed class RequirementReading
         if (!(shortEnd < design))
         {
             _problems[NumberField.ShortEnd] = Text($"The short end, {shortEnd:0.####} nm, must lie below the design wavelength, {design:0.####} nm.");
+        }
+
+        if (longEnd - shortEnd < RequirementReading.NarrowestBand)
+        {
+            _problems[NumberField.LongEnd] = Text($"The band must be at least {RequirementReading.NarrowestBand:0.##} nm wide.");
         }
 
         if (!(design < longEnd))
