@@ -61,3 +61,14 @@ document.addEventListener('keydown', event => {
 document.addEventListener('click', event => {
   for (const menu of document.querySelectorAll('details.menu[open], details.why[open]')) if (!menu.contains(event.target)) menu.open = false;
 });
+
+// The page has a base address, so a link to a place on it would leave it.
+document.addEventListener('click', event => {
+  const link = event.target.closest?.('a[href^="#"]');
+  const place = link && document.getElementById(link.getAttribute('href').slice(1));
+  if (!place) return;
+  event.preventDefault();
+  event.stopPropagation();
+  place.scrollIntoView();
+  place.focus({ preventScroll: true });
+}, true);

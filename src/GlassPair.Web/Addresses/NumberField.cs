@@ -74,8 +74,8 @@ public sealed record NumberField(string Key, string Label, string Unit, double M
 
     /// <summary>Expansion of the housing.</summary>
     public static NumberField Housing { get; } = new(
-        "housing", "Housing expansion", "10⁻⁶/K", -100.0, 1000.0, "23.6",
-        "Of what holds lens and image apart: aluminum 23.6, steel about 11, titanium about 9, invar about 1.");
+        "housing", "Housing α", "10⁻⁶/K", -100.0, 1000.0, "23.6",
+        "The expansion of what holds lens and image apart: aluminum 23.6, steel about 11, titanium about 9, invar about 1.");
 
     /// <summary>Relative Abbe tolerance of the grade ordered.</summary>
     public static NumberField AbbeTolerance { get; } = new(
@@ -89,8 +89,8 @@ public sealed record NumberField(string Key, string Label, string Unit, double M
 
     /// <summary>Limit on the difference in expansion.</summary>
     public static NumberField ExpansionDifference { get; } = new(
-        "expansion", "Expansion difference", "10⁻⁶/K", 0.0, 50.0, "",
-        "The largest Δα between the two glasses, −30 to +70 °C. Up to 1.5 is cemented without worry, above 3 hardly; empty sets no limit.");
+        "expansion", "Δα of the pair", "10⁻⁶/K", 0.0, 50.0, "",
+        "The largest difference in expansion between the two glasses, −30 to +70 °C. Up to 1.5 is cemented without worry, above 3 hardly; empty sets no limit.");
 
     /// <summary>Gets every field in the order of the form.</summary>
     public static ImmutableArray<NumberField> All { get; } =

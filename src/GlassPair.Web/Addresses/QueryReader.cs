@@ -9,6 +9,7 @@ namespace GlassPair.Web.Addresses;
 public sealed class QueryReader
 {
     private readonly Dictionary<string, StringValues> _pairs;
+    private readonly int _strange;
     private readonly ImmutableArray<string>.Builder _notices = ImmutableArray.CreateBuilder<string>();
 
     /// <summary>Starts to read.</summary>
@@ -21,6 +22,7 @@ public sealed class QueryReader
         {
             if (!known.Contains(key, StringComparer.OrdinalIgnoreCase))
             {
+                _strange++;
                 Notice($"The address holds “{TypedNumber.Shorten(key)}”, which means nothing here; it was left out.");
             }
             else if (values.Count > 1)
@@ -29,6 +31,9 @@ public sealed class QueryReader
             }
         }
     }
+
+    /// <summary>Gets whether the query holds nothing that means something here, as on a first visit.</summary>
+    public bool IsBlank => _pairs.Count == _strange;
 
     /// <summary>Gets what was not understood, and what was done about it, as sentences.</summary>
     public ImmutableArray<string> Notices => _notices.ToImmutable();

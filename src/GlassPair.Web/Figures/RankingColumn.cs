@@ -1,5 +1,7 @@
 using System.Collections.Immutable;
 using GlassPair.Optics.Glasses;
+using GlassPair.Optics.Practice;
+using GlassPair.Optics.Spectrum;
 
 namespace GlassPair.Web.Figures;
 
@@ -46,6 +48,7 @@ public sealed record RankingColumn(
         Number("p1", "P₁", "of band", "Partial dispersion of the positive glass over the band.", p => p.Positive.PartialDispersion, v => FigureText.Fixed(v, 4)),
         Number("p2", "P₂", "of band", "Partial dispersion of the negative glass over the band.", p => p.Negative.PartialDispersion, v => FigureText.Fixed(v, 4)),
         Number("expansion", "Δα", "10⁻⁶/K", "Difference in linear expansion, −30 to +70 °C: what strains a cement layer.", p => Math.Abs(p.ExpansionDifference.GetValueOrDefault(double.NaN)) * 1e6, v => FigureText.Fixed(v, 1), true),
+        Number("transmittance", "τ short", "% in 10 mm each", "Internal transmittance at the short end of the band through 10 mm of each glass.", Transmittance, v => FigureText.Fixed(v, 1)),
         Number("density1", "ρ₁", "g/cm³", "Density of the positive glass.", p => p.Positive.Glass.DensityGramsPerCm3, v => FigureText.Fixed(v, 2)),
         Number("density2", "ρ₂", "g/cm³", "Density of the negative glass.", p => p.Negative.Glass.DensityGramsPerCm3, v => FigureText.Fixed(v, 2)),
         new(SupplyKey, "Supply", "+ −", "How each glass could be had as its maker's list said: ● recommended, ○ listed, ◔ on request, ? unconfirmed, × discontinued.",
@@ -78,6 +81,13 @@ public sealed record RankingColumn(
 
     private static (string? Positive, string? Negative) Classes(RankedPair pair, Func<ResistanceClasses, double?> of) =>
         (of(pair.Positive.Glass.Resistance) is { } p ? FigureText.Plain(p) : null, of(pair.Negative.Glass.Resistance) is { } n ? FigureText.Plain(n) : null);
+
+    private static double? Transmittance(RankedPair pair)
+    {
+        const double thickness = 10.0;
+        Wavelength shortEnd = pair.Solution.Requirement.Band.ShortEnd;
+        return 100.0 * InternalTransmittance.TryOf(pair.Positive.Glass, shortEnd, thickness) * InternalTransmittance.TryOf(pair.Negative.Glass, shortEnd, thickness);
+    }
 
     private static double? Finite(double? value) => value is { } v && double.IsFinite(v) ? v : null;
 }

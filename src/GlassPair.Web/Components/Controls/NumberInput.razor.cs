@@ -18,6 +18,9 @@ public sealed partial class NumberInput : ComponentBase
     /// <summary>Gets or sets the unit, where it says more than the field's own.</summary>
     [Parameter] public string? Unit { get; set; }
 
+    /// <summary>Gets or sets whether it stands in a line with others that name it and its unit for the eye.</summary>
+    [Parameter] public bool Inline { get; set; }
+
     /// <summary>Gets or sets the id of a list of suggestions.</summary>
     [Parameter] public string? List { get; set; }
 

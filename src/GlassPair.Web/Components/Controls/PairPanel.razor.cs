@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Requirements;
 using GlassPair.Web.Figures;
@@ -8,6 +9,9 @@ namespace GlassPair.Web.Components.Controls;
 /// <summary>The chosen pair in words, pictures and numbers.</summary>
 public sealed partial class PairPanel : ComponentBase
 {
+    private const int Foremost = 5;
+    private ImmutableArray<Figure> _figures = [];
+
     /// <summary>Gets or sets the pair.</summary>
     [Parameter, EditorRequired] public required RankedPair Pair { get; set; }
 
@@ -22,6 +26,9 @@ public sealed partial class PairPanel : ComponentBase
 
     /// <summary>Called with the pair to pin, or no longer to pin.</summary>
     [Parameter] public EventCallback<RankedPair> PinToggled { get; set; }
+
+    /// <inheritdoc/>
+    protected override void OnParametersSet() => _figures = PairFigures.Of(Pair, Quality);
 
     private bool IsPinned => Pinned is not null && Addresses.PairName.Of(Pinned.Solution) == Addresses.PairName.Of(Pair.Solution);
 

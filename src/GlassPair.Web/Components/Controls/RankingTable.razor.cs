@@ -117,7 +117,7 @@ public sealed partial class RankingTable : ComponentBase
 
     private static ImmutableDictionary<int, string> HeadingsOf(IReadOnlyList<Tie> ties) => ties.ToImmutableDictionary(
         t => t.First - 1,
-        t => $"Ranks {t.First} to {t.Last} tie: once made, each has one chance in three or more to be better than rank {t.First}. Decide by what stands to the right.");
+        t => $"{t.First}–{t.Last} tie: once made, any may prove better than rank {t.First} (chance ⅓ or more). Decide by what stands to the right.");
 
     private Task SortAsync((string Key, bool Descending) sort) =>
         Picked.InvokeAsync(State with { SortBy = sort.Key == "rank" && !sort.Descending ? null : sort.Key, SortDescending = sort.Descending });

@@ -64,7 +64,7 @@ public sealed partial class Workbench : ComponentBase
 
     private string Description => _answer is null || _chosen is null
         ? "Which glasses bring a band of wavelengths to one focus well enough for an aperture, out of everything on sale."
-        : $"{AskedFor} {AskedDetails}. {_chosen.Positive.Glass.Name} ({_chosen.Positive.Glass.Maker}) and {_chosen.Negative.Glass.Name} ({_chosen.Negative.Glass.Maker}): {PairFindings.Of(_chosen, _answer.Shortlist.Request.Quality)[0].Sentence} "
+        : $"{AskedFor} {AskedDetails}. {_chosen.Positive.Glass.Name} ({_chosen.Positive.Glass.Maker}) and {_chosen.Negative.Glass.Name} ({_chosen.Negative.Glass.Maker}): {PairFindings.Of(_chosen)[0].Title}, {PairFindings.Of(_chosen)[0].Sentence}. "
             + $"{FigureText.Count(_answer.Shortlist.CombinationsHolding)} of {FigureText.Count(_answer.Shortlist.CombinationsFeasible)} pairs hold.";
 
     private string Waiting => _failure
