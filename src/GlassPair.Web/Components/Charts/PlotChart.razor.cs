@@ -144,5 +144,5 @@ public sealed partial class PlotChart : ComponentBase, IAsyncDisposable
     private async Task DownloadAsync(string format) => await _module!.InvokeVoidAsync("download", _id, format, FileName);
 
     /// <summary>What is sent to the script: the figure, with null for each trace that it has already.</summary>
-    private sealed record FigureChange(int Serial, PlotFigure Figure, ImmutableArray<PlotTrace?> Traces);
+    internal sealed record FigureChange(int Serial, PlotFigure Figure, ImmutableArray<PlotTrace?> Traces);
 }
