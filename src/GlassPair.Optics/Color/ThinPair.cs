@@ -9,6 +9,12 @@ public static class ThinPair
     /// <summary>Between this share of the largest air space and the whole, the band may have no least residual though its ends can be united.</summary>
     internal const double SureAirSpace = 0.999;
 
+    /// <summary>Newton's method for an air-spaced pair takes no more steps than these.</summary>
+    internal const int MostSteps = 60;
+
+    /// <summary>A relative step so small that the next, about its square, would be lost in rounding.</summary>
+    internal const double SmallStep = 1e-9;
+
     /// <summary>Solves the pair in the order in which light meets it.</summary>
     public static ThinOutcome Solve(Requirement requirement, GlassIndices front, GlassIndices rear)
     {
@@ -56,58 +62,53 @@ public static class ThinPair
     {
         double frontMean = band.MeanOf(front.Changes.AsSpan());
         double rearMean = band.MeanOf(rear.Changes.AsSpan());
-        double g11 = 0.0;
-        double g12 = 0.0;
-        double g22 = 0.0;
         double along = 0.0;
         double gap = 0.0;
         for (int i = 0; i < band.Samples.Length; i++)
         {
-            double c1 = front.Changes[i] - frontMean;
-            double c2 = rear.Changes[i] - rearMean;
-            double difference = c2 - c1;
             double weight = band.Samples[i].Weight;
-            g11 += weight * c1 * c1;
-            g12 += weight * c1 * c2;
-            g22 += weight * c2 * c2;
+            double c2 = rear.Changes[i] - rearMean;
+            double difference = c2 - (front.Changes[i] - frontMean);
             along += weight * c2 * difference;
             gap += weight * difference * difference;
         }
 
         // p₁ = c₂·(c₂ − c₁)/|c₂ − c₁|²: equal to (G₂₂ − G₁₂)/(G₁₁ + G₂₂ − 2 G₁₂), without its cancellation
-        return space == 0.0
-            ? gap > 0.0 ? along / gap : null
-            : EndsUnited(front.AbbeNumber, rear.AbbeNumber, space) is { } start ? AirSpacedBalance(g11, g12, g22, space, start) : null;
+        return space == 0.0 ? gap > 0.0 ? along / gap : null
+            : EndsUnited(front.AbbeNumber, rear.AbbeNumber, space) is { } start
+                ? AirSpacedBalance(along, gap, band.VarianceOf(rear.Changes.AsSpan()), space, start)
+                : null;
     }
 
-    /// <summary>The p that minimizes p² G₁₁ + 2 p h G₁₂ + h² G₂₂ with h = (1 − δ p)(1 − p), by Newton's method from the ends united.</summary>
-    private static double? AirSpacedBalance(double g11, double g12, double g22, double space, double start)
+    /// <summary>
+    /// The p that minimizes |p c₁ + (1 − δ p)(1 − p) c₂|² by Newton's method from the ends united; null where it leads to no minimum.
+    /// With d = c₂ − c₁ and a = 1 − δ p + δ p² the vector is a c₂ − p d, so that little is lost to cancellation where the glasses are much alike.
+    /// </summary>
+    /// <param name="along">c₂·d.</param>
+    /// <param name="gap">d·d.</param>
+    /// <param name="rearVariance">c₂·c₂.</param>
+    /// <param name="space">δ.</param>
+    /// <param name="start">p with the ends united.</param>
+    internal static double? AirSpacedBalance(double along, double gap, double rearVariance, double space, double start)
     {
-        const int mostSteps = 60;
         double p = start;
-        for (int step = 0; step < mostSteps; step++)
+        for (int step = 0; step < MostSteps; step++)
         {
-            double h = (1.0 - (space * p)) * (1.0 - p);
-            double slope = (2.0 * space * p) - 1.0 - space;
-            double gradient = (p * g11) + ((h + (p * slope)) * g12) + (h * slope * g22);
-            double curvature = g11 + (((2.0 * slope) + (2.0 * space * p)) * g12) + (((slope * slope) + (2.0 * space * h)) * g22);
-            if (!(curvature > 0.0))
+            double a = 1.0 - (space * p) + (space * p * p);
+            double slope = (2.0 * space * p) - space;
+            double gradient = (a * slope * rearVariance) - ((a + (p * slope)) * along) + (p * gap);
+            double curvature = (((slope * slope) + (2.0 * space * a)) * rearVariance) - (((2.0 * slope) + (2.0 * space * p)) * along) + gap;
+            double change = gradient / curvature;
+            if (!(curvature > 0.0 && Math.Abs(p - change) <= ThinSolution.LargestPower))
             {
                 return null;
             }
 
-            double next = p - (gradient / curvature);
-            if (!(Math.Abs(next) <= ThinSolution.LargestPower))
+            p -= change;
+            if (Math.Abs(change) <= SmallStep * Math.Abs(p))
             {
-                return null;
+                return p;
             }
-
-            if (Math.Abs(next - p) <= 1e-15 * Math.Abs(p))
-            {
-                return next;
-            }
-
-            p = next;
         }
 
         return p;

@@ -19,13 +19,16 @@ internal sealed class CandidatePicks(ShortlistRequest request)
     public bool MayUse(GlassIndices glass) => request.PairsPerGlass is not { } most || _uses.GetValueOrDefault(glass) < most;
 
     /// <summary>Picks from a pool.</summary>
+    /// <param name="pool">The pool.</param>
+    /// <param name="glassesOf">The glasses of a combination.</param>
+    /// <param name="solve">Solves them, in the order in which a shortlist shows them.</param>
     /// <returns>Whether all that were asked for are picked.</returns>
-    public bool TakeFrom(CandidatePool pool, Func<Combination, ThinOutcome> solve)
+    public bool TakeFrom(CandidatePool pool, Func<Combination, GlassIndices[]> glassesOf, Func<GlassIndices[], ThinOutcome> solve)
     {
         foreach (ArraySegment<Combination> group in pool.Groups())
         {
-            IEnumerable<ThinSolution> solutions = group.Select(solve).Cast<ThinSolution>();
-            foreach (ThinSolution solution in group.Count == 1 ? solutions : RankingOrder.OfTied(solutions))
+            ThinSolution[] tied = [.. group.Select(glassesOf).Where(g => g.All(MayUse)).Select(solve).Cast<ThinSolution>()];
+            foreach (ThinSolution solution in RankingOrder.OfTied(tied))
             {
                 if (Solutions.Count == request.Take)
                 {

@@ -16,32 +16,20 @@ internal sealed class PairColumns
     {
         Requirement = requirement;
         Glasses = [.. glasses.OrderByDescending(g => g.AbbeNumber)];
+        PowerLimit = requirement.ElementPowerLimit ?? double.PositiveInfinity;
         Space = requirement.AirSpace.GetValueOrDefault() / requirement.FocalLength;
         Weights = [.. requirement.Band.Samples.Select(s => s.Weight)];
         Abbe = Column(g => g.AbbeNumber);
         ShortChange = Column(g => g.ShortChange);
         LongChange = Column(g => g.LongChange);
+        Mean = Column(g => requirement.Band.MeanOf(g.Changes.AsSpan()));
+        Variance = Column(g => requirement.Band.VarianceOf(g.Changes.AsSpan()));
         Floor = Column(g => ThinFloor.Of(g, requirement.Band, quality));
         Expansion = Column(g => g.Glass.ExpansionPerKelvin ?? double.NaN);
         Changes = new double[Weights.Length][];
-        Mean = new double[Abbe.Length];
         for (int k = 0; k < Weights.Length; k++)
         {
             Changes[k] = Column(g => g.Changes[k]);
-            for (int j = 0; j < Mean.Length; j++)
-            {
-                Mean[j] += Weights[k] * Changes[k][j];
-            }
-        }
-
-        Variance = new double[Abbe.Length];
-        for (int k = 0; k < Weights.Length; k++)
-        {
-            for (int j = 0; j < Variance.Length; j++)
-            {
-                double off = Changes[k][j] - Mean[j];
-                Variance[j] += Weights[k] * off * off;
-            }
         }
     }
 
@@ -53,6 +41,9 @@ internal sealed class PairColumns
 
     /// <summary>Gets how many glasses there are.</summary>
     public int Count => Glasses.Length;
+
+    /// <summary>Gets the largest |φᵢ|/Φ allowed; infinite where any may be.</summary>
+    public double PowerLimit { get; }
 
     /// <summary>Gets δ, the air space in units of the focal length; 0 in contact.</summary>
     public double Space { get; }

@@ -1,5 +1,5 @@
-using System.Numerics;
 using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Requirements;
 
@@ -9,18 +9,20 @@ namespace GlassPair.Optics.Rankings;
 /// <remarks>
 /// Both do the arithmetic of <see cref="ThinPair"/> and <see cref="ThinSolution"/> operation by operation, without fused
 /// multiply-adds, so that all three round alike: every processor gets the same bits, and no figure has to be computed again to rank.
+/// Partners with which an element's power exceeds the requirement's limit get their powers; the other figures may be left as they are.
 /// </remarks>
 internal static class PairKernel
 {
-    // Newton's method of ThinPair gives up after as many.
-    private const int MostSteps = 60;
-
     /// <summary>Solves row <paramref name="front"/> by the fastest form that this processor has.</summary>
     public static void Fill(PairColumns glasses, int front, PairFigures row)
     {
-        if (Vector.IsHardwareAccelerated)
+        if (Vector512.IsHardwareAccelerated)
         {
-            FillVector(glasses, front, row);
+            FillVector<Lanes512>(glasses, front, row);
+        }
+        else if (Vector256.IsHardwareAccelerated)
+        {
+            FillVector<Lanes256>(glasses, front, row);
         }
         else
         {
@@ -28,7 +30,7 @@ internal static class PairKernel
         }
     }
 
-    /// <summary>Solves row <paramref name="front"/>, a pair at a time.</summary>
+    /// <summary>Solves a row, a pair at a time.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
     public static void FillScalar(PairColumns glasses, int front, PairFigures row)
     {
@@ -40,6 +42,10 @@ internal static class PairKernel
         {
             (double p1, double p2) = Powers(glasses, front, rear);
             (row.FrontPower[rear], row.RearPower[rear]) = (p1, p2);
+            if (Math.Max(Math.Abs(p1), Math.Abs(p2)) > glasses.PowerLimit)
+            {
+                continue;
+            }
 
             double mean = 0.0;
             double least = double.PositiveInfinity;
@@ -75,71 +81,78 @@ internal static class PairKernel
 
     /// <summary>Vector twin of <see cref="FillScalar"/>: lane l holds partner rear + l.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    public static void FillVector(PairColumns glasses, int front, PairFigures row)
+    public static void FillVector<T>(PairColumns glasses, int front, PairFigures row)
+        where T : unmanaged, ILanes<T>
     {
-        var focal = new Vector<double>(glasses.Requirement.FocalLength);
+        T one = T.All(1.0);
+        double focal = glasses.Requirement.FocalLength;
         double space = glasses.Space;
+        T powerLimit = T.All(glasses.PowerLimit);
         double[] weights = glasses.Weights;
-        Span<Vector<double>> shifts = stackalloc Vector<double>[weights.Length];
-        for (int rear = front + 1; rear < glasses.Count; rear += Vector<double>.Count)
+        Span<T> shifts = stackalloc T[weights.Length];
+        for (int rear = front + 1; rear < glasses.Count; rear += T.Count)
         {
-            (Vector<double> p1, Vector<double> p2) = PowersVector(glasses, front, rear);
-            p1.CopyTo(row.FrontPower, rear);
-            p2.CopyTo(row.RearPower, rear);
+            (T p1, T p2) = Powers<T>(glasses, front, rear);
+            p1.Store(row.FrontPower, rear);
+            p2.Store(row.RearPower, rear);
+            if (T.Bits(T.AtMost(T.Max(T.Abs(p1), T.Abs(p2)), powerLimit)) == 0)
+            {
+                continue;
+            }
 
-            Vector<double> mean = Vector<double>.Zero;
-            var least = new Vector<double>(double.PositiveInfinity);
-            var most = new Vector<double>(double.NegativeInfinity);
+            T mean = T.All(0.0);
+            T least = T.All(double.PositiveInfinity);
+            T most = T.All(double.NegativeInfinity);
             for (int k = 0; k < shifts.Length; k++)
             {
                 double[] changes = glasses.Changes[k];
-                Vector<double> shift = focal * ShiftVector(p1, p2, changes[front], new Vector<double>(changes, rear), space);
+                T shift = focal * Shift(p1, p2, T.All(changes[front]), T.Load(changes, rear), space);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
-                least = Vector.MinNative(least, shift);
-                most = Vector.MaxNative(most, shift);
+                least = T.Min(least, shift);
+                most = T.Max(most, shift);
             }
 
-            Vector<double> variance = Vector<double>.Zero;
+            T variance = T.All(0.0);
             for (int k = 0; k < shifts.Length; k++)
             {
-                Vector<double> off = shifts[k] - mean;
+                T off = shifts[k] - mean;
                 variance += weights[k] * off * off;
             }
 
-            Vector<double> rms = Vector.SquareRoot(variance);
-            Vector<double> shortShift = focal * ShiftVector(p1, p2, glasses.ShortChange[front], new Vector<double>(glasses.ShortChange, rear), space);
-            Vector<double> longShift = focal * ShiftVector(p1, p2, glasses.LongChange[front], new Vector<double>(glasses.LongChange, rear), space);
-            Vector<double> height = Vector<double>.One - (space * p1);
-            Vector<double> rearWeight = height * height * p2;
-            Vector<double> floor = focal * Vector.SquareRoot((p1 * p1 * glasses.Floor[front]) + (rearWeight * rearWeight * new Vector<double>(glasses.Floor, rear)));
-            rms.CopyTo(row.Rms, rear);
-            (most - least).CopyTo(row.PeakToValley, rear);
-            (-0.5 * (shortShift + longShift)).CopyTo(row.SecondarySpectrum, rear);
-            Vector.SquareRoot((rms * rms) + (floor * floor)).CopyTo(row.ExpectedRms, rear);
+            T rms = T.SquareRoot(variance);
+            T shortShift = focal * Shift(p1, p2, T.All(glasses.ShortChange[front]), T.Load(glasses.ShortChange, rear), space);
+            T longShift = focal * Shift(p1, p2, T.All(glasses.LongChange[front]), T.Load(glasses.LongChange, rear), space);
+            T height = one - (space * p1);
+            T rearWeight = height * height * p2;
+            T floor = focal * T.SquareRoot((p1 * p1 * T.All(glasses.Floor[front])) + (rearWeight * rearWeight * T.Load(glasses.Floor, rear)));
+            rms.Store(row.Rms, rear);
+            (most - least).Store(row.PeakToValley, rear);
+            (-0.5 * (shortShift + longShift)).Store(row.SecondarySpectrum, rear);
+            T.SquareRoot((rms * rms) + (floor * floor)).Store(row.ExpectedRms, rear);
         }
     }
 
-    /// <summary>Both powers as <see cref="ThinPair.Solve"/> finds them; NaN where it finds none.</summary>
-    /// <remarks>In contact the glass of more power counts as the front one, as in a shortlist; that changes the rounding only.</remarks>
+    /// <summary>Both powers as <see cref="PairRanking.Solve"/> finds them; NaN where it finds none.</summary>
     private static (double Front, double Rear) Powers(PairColumns glasses, int front, int rear)
     {
         double space = glasses.Space;
         bool endsUnited = glasses.Requirement.Balance == ColorBalance.EndsUnited;
         double v1 = glasses.Abbe[front];
         double v2 = glasses.Abbe[rear];
+        (double along, double alongFront, double gap) = endsUnited ? (v1, -v2, v1 - v2) : Balance(glasses, front, rear);
         if (space != 0.0)
         {
             double start = EndsUnited(v1, v2, space);
-            double spaced = Checked(endsUnited ? start : AirSpacedBalance(glasses, front, rear, start));
+            double spaced = Checked(endsUnited ? start : AirSpacedBalance(along, gap, glasses.Variance[rear], space, start));
             return (spaced, (1.0 - spaced) / (1.0 - (space * spaced)));
         }
 
-        double p1 = Checked(endsUnited ? v1 / (v1 - v2) : ContactBalance(glasses, front, rear));
+        double p1 = Checked(along / gap);
         double p2 = 1.0 - p1;
         if (p2 > p1)
         {
-            p2 = Checked(endsUnited ? v2 / (v2 - v1) : ContactBalance(glasses, rear, front));
+            p2 = Checked(alongFront / gap);
             p1 = 1.0 - p2;
         }
 
@@ -148,42 +161,39 @@ internal static class PairKernel
         static double Checked(double power) => Math.Abs(power) <= ThinSolution.LargestPower ? power : double.NaN;
     }
 
-    private static (Vector<double> Front, Vector<double> Rear) PowersVector(PairColumns glasses, int front, int rear)
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static (T Front, T Rear) Powers<T>(PairColumns glasses, int front, int rear)
+        where T : unmanaged, ILanes<T>
     {
+        T one = T.All(1.0);
         double space = glasses.Space;
         bool endsUnited = glasses.Requirement.Balance == ColorBalance.EndsUnited;
-        var v1 = new Vector<double>(glasses.Abbe[front]);
-        var v2 = new Vector<double>(glasses.Abbe, rear);
+        T v1 = T.All(glasses.Abbe[front]);
+        T v2 = T.Load(glasses.Abbe, rear);
+        (T along, T alongFront, T gap) = endsUnited ? (v1, -v2, v1 - v2) : Balance<T>(glasses, front, rear);
         if (space != 0.0)
         {
-            Vector<double> start = EndsUnitedVector(v1, v2, space);
-            Vector<double> spaced = Checked(endsUnited ? start : AirSpacedBalanceVector(glasses, front, rear, start));
-            return (spaced, (Vector<double>.One - spaced) / (Vector<double>.One - (space * spaced)));
+            T start = EndsUnited(v1, v2, space);
+            T spaced = Checked(endsUnited ? start : AirSpacedBalance(along, gap, T.Load(glasses.Variance, rear), space, start));
+            return (spaced, (one - spaced) / (one - (space * spaced)));
         }
 
-        (Vector<double> alongRear, Vector<double> alongFront, Vector<double> gap) = endsUnited
-            ? (v1, -v2, v1 - v2)
-            : ContactBalanceVector(glasses, front, rear);
-        Vector<double> p1 = Checked(alongRear / gap);
-        Vector<double> p2 = Vector<double>.One - p1;
-        Vector<long> turned = Vector.GreaterThan(p2, p1);
-        if (turned != Vector<long>.Zero)
+        T p1 = Checked(along / gap);
+        T p2 = one - p1;
+        T turned = T.Exceeds(p2, p1);
+        if (T.Bits(turned) != 0)
         {
-            Vector<double> turnedPower = Checked(alongFront / gap);
-            p2 = Vector.ConditionalSelect(turned, turnedPower, p2);
-            p1 = Vector.ConditionalSelect(turned, Vector<double>.One - turnedPower, p1);
+            T rearPower = Checked(alongFront / gap);
+            p2 = T.Select(turned, rearPower, p2);
+            p1 = T.Select(turned, one - rearPower, p1);
         }
 
         return (p1, p2);
 
-        static Vector<double> Checked(Vector<double> power) =>
-            Vector.ConditionalSelect(Vector.LessThanOrEqual(Vector.Abs(power), new Vector<double>(ThinSolution.LargestPower)), power, NotANumber);
+        static T Checked(T power) => T.Select(T.AtMost(T.Abs(power), T.All(ThinSolution.LargestPower)), power, T.All(double.NaN));
     }
 
-    private static Vector<double> NotANumber => new(double.NaN);
-
-    /// <summary>−s/(1 + s), see <see cref="FocalShift"/>.</summary>
-    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    /// <summary>See <see cref="FocalShift.Of"/>.</summary>
     private static double Shift(double p1, double p2, double t1, double t2, double space)
     {
         double front = p1 * t1;
@@ -199,53 +209,58 @@ internal static class PairKernel
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static Vector<double> ShiftVector(Vector<double> p1, Vector<double> p2, double t1, Vector<double> t2, double space)
+    private static T Shift<T>(T p1, T p2, T t1, T t2, double space)
+        where T : unmanaged, ILanes<T>
     {
-        Vector<double> front = p1 * t1;
+        T one = T.All(1.0);
+        T front = p1 * t1;
         if (space == 0.0)
         {
-            Vector<double> sum = front + (p2 * t2);
-            return -sum / (Vector<double>.One + sum);
+            T sum = front + (p2 * t2);
+            return -sum / (one + sum);
         }
 
-        Vector<double> height = Vector<double>.One - (space * p1);
-        Vector<double> s = front + (height * p2 * t2) - (space * front * p2 * (Vector<double>.One + t2));
-        return -((space * front) + (height * s)) / (Vector<double>.One + s);
+        T height = one - (space * p1);
+        T s = front + (height * p2 * t2) - (space * front * p2 * (one + t2));
+        return -((space * front) + (height * s)) / (one + s);
     }
 
-    /// <summary>p₁ of least variance in contact, c₂·(c₂ − c₁)/|c₂ − c₁|².</summary>
-    private static double ContactBalance(PairColumns glasses, int first, int second)
+    /// <summary>c₂·(c₂ − c₁), c₁·(c₁ − c₂) and |c₂ − c₁|² of <see cref="ThinPair.BandBalanced"/>.</summary>
+    private static (double AlongRear, double AlongFront, double Gap) Balance(PairColumns glasses, int front, int rear)
     {
-        double along = 0.0;
+        double alongRear = 0.0;
+        double alongFront = 0.0;
         double gap = 0.0;
         for (int k = 0; k < glasses.Weights.Length; k++)
         {
             double weight = glasses.Weights[k];
-            double c2 = glasses.Changes[k][second] - glasses.Mean[second];
-            double difference = c2 - (glasses.Changes[k][first] - glasses.Mean[first]);
-            along += weight * c2 * difference;
+            double c1 = glasses.Changes[k][front] - glasses.Mean[front];
+            double c2 = glasses.Changes[k][rear] - glasses.Mean[rear];
+            double difference = c2 - c1;
+            alongRear += weight * c2 * difference;
+            alongFront -= weight * c1 * difference;
             gap += weight * difference * difference;
         }
 
-        return along / gap;
+        return (alongRear, alongFront, gap);
     }
 
-    /// <summary>The parts of <see cref="ContactBalance"/>, with the glass of the row first and with it second.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (Vector<double> AlongRear, Vector<double> AlongFront, Vector<double> Gap) ContactBalanceVector(PairColumns glasses, int front, int rear)
+    private static (T AlongRear, T AlongFront, T Gap) Balance<T>(PairColumns glasses, int front, int rear)
+        where T : unmanaged, ILanes<T>
     {
         double[] weights = glasses.Weights;
-        double mean1 = glasses.Mean[front];
-        var mean2 = new Vector<double>(glasses.Mean, rear);
-        Vector<double> alongRear = Vector<double>.Zero;
-        Vector<double> alongFront = Vector<double>.Zero;
-        Vector<double> gap = Vector<double>.Zero;
+        double frontMean = glasses.Mean[front];
+        T rearMean = T.Load(glasses.Mean, rear);
+        T alongRear = T.All(0.0);
+        T alongFront = T.All(0.0);
+        T gap = T.All(0.0);
         for (int k = 0; k < weights.Length; k++)
         {
             double[] changes = glasses.Changes[k];
-            double c1 = changes[front] - mean1;
-            Vector<double> c2 = new Vector<double>(changes, rear) - mean2;
-            Vector<double> difference = c2 - new Vector<double>(c1);
+            double c1 = changes[front] - frontMean;
+            T c2 = T.Load(changes, rear) - rearMean;
+            T difference = c2 - T.All(c1);
             alongRear += weights[k] * c2 * difference;
             alongFront -= weights[k] * c1 * difference;
             gap += weights[k] * difference * difference;
@@ -255,82 +270,37 @@ internal static class PairKernel
     }
 
     /// <summary>See <see cref="ThinPair.EndsUnited"/>; NaN where it is null.</summary>
-    private static double EndsUnited(double v1, double v2, double space)
+    private static double EndsUnited(double v1, double v2, double space) => ThinPair.EndsUnited(v1, v2, space) ?? double.NaN;
+
+    [MethodImpl(MethodImplOptions.AggressiveInlining)]
+    private static T EndsUnited<T>(T v1, T v2, double space)
+        where T : unmanaged, ILanes<T>
     {
-        double b = 1.0 - (v2 / v1) + space;
-        return b == 0.0 ? double.NaN : 2.0 / (b + Math.CopySign(Math.Sqrt((b * b) - (4.0 * space)), b));
+        T b = T.All(1.0) - (v2 / v1) + T.All(space);
+        T root = T.SquareRoot((b * b) - T.All(4.0 * space));
+        return T.Select(T.AreEqual(b, T.All(0.0)), T.All(double.NaN), T.All(2.0) / (b + T.CopySign(root, b)));
     }
 
-    private static Vector<double> EndsUnitedVector(Vector<double> v1, Vector<double> v2, double space)
+    /// <summary>See <see cref="ThinPair.AirSpacedBalance"/>; NaN where it is null.</summary>
+    private static double AirSpacedBalance(double along, double gap, double rearVariance, double space, double start) =>
+        ThinPair.AirSpacedBalance(along, gap, rearVariance, space, start) ?? double.NaN;
+
+    private static T AirSpacedBalance<T>(T along, T gap, T rearVariance, double space, T start)
+        where T : unmanaged, ILanes<T>
     {
-        Vector<double> b = Vector<double>.One - (v2 / v1) + new Vector<double>(space);
-        Vector<double> root = Vector.SquareRoot((b * b) - new Vector<double>(4.0 * space));
-        return Vector.ConditionalSelect(Vector.Equals(b, Vector<double>.Zero), NotANumber, new Vector<double>(2.0) / (b + Vector.CopySign(root, b)));
-    }
-
-    /// <summary>Newton's method of <see cref="ThinPair"/> from the ends united; NaN where it is null.</summary>
-    private static double AirSpacedBalance(PairColumns glasses, int front, int rear, double start)
-    {
-        double space = glasses.Space;
-        double g11 = glasses.Variance[front];
-        double g22 = glasses.Variance[rear];
-        double g12 = 0.0;
-        for (int k = 0; k < glasses.Weights.Length; k++)
+        T p = start;
+        T active = T.AreEqual(p, p);
+        for (int step = 0; step < ThinPair.MostSteps && T.Bits(active) != 0; step++)
         {
-            g12 += glasses.Weights[k] * (glasses.Changes[k][front] - glasses.Mean[front]) * (glasses.Changes[k][rear] - glasses.Mean[rear]);
-        }
-
-        double p = start;
-        for (int step = 0; step < MostSteps; step++)
-        {
-            double h = (1.0 - (space * p)) * (1.0 - p);
-            double slope = (2.0 * space * p) - 1.0 - space;
-            double gradient = (p * g11) + ((h + (p * slope)) * g12) + (h * slope * g22);
-            double curvature = g11 + (((2.0 * slope) + (2.0 * space * p)) * g12) + (((slope * slope) + (2.0 * space * h)) * g22);
-            double next = p - (gradient / curvature);
-            if (!(curvature > 0.0 && Math.Abs(next) <= ThinSolution.LargestPower))
-            {
-                return double.NaN;
-            }
-
-            bool done = Math.Abs(next - p) <= 1e-15 * Math.Abs(p);
-            p = next;
-            if (done)
-            {
-                break;
-            }
-        }
-
-        return p;
-    }
-
-    private static Vector<double> AirSpacedBalanceVector(PairColumns glasses, int front, int rear, Vector<double> start)
-    {
-        var space = new Vector<double>(glasses.Space);
-        var g11 = new Vector<double>(glasses.Variance[front]);
-        var g22 = new Vector<double>(glasses.Variance, rear);
-        var mean2 = new Vector<double>(glasses.Mean, rear);
-        Vector<double> g12 = Vector<double>.Zero;
-        for (int k = 0; k < glasses.Weights.Length; k++)
-        {
-            double[] changes = glasses.Changes[k];
-            g12 += glasses.Weights[k] * (changes[front] - glasses.Mean[front]) * (new Vector<double>(changes, rear) - mean2);
-        }
-
-        Vector<double> p = start;
-        Vector<long> active = Vector.Equals(p, p);
-        for (int step = 0; step < MostSteps && active != Vector<long>.Zero; step++)
-        {
-            Vector<double> h = (Vector<double>.One - (space * p)) * (Vector<double>.One - p);
-            Vector<double> slope = (2.0 * space * p) - Vector<double>.One - space;
-            Vector<double> gradient = (p * g11) + ((h + (p * slope)) * g12) + (h * slope * g22);
-            Vector<double> curvature = g11 + (((2.0 * slope) + (2.0 * space * p)) * g12) + (((slope * slope) + (2.0 * space * h)) * g22);
-            Vector<double> next = p - (gradient / curvature);
-            Vector<long> sound = Vector.GreaterThan(curvature, Vector<double>.Zero)
-                & Vector.LessThanOrEqual(Vector.Abs(next), new Vector<double>(ThinSolution.LargestPower));
-            Vector<long> done = Vector.LessThanOrEqual(Vector.Abs(next - p), 1e-15 * Vector.Abs(p));
-            p = Vector.ConditionalSelect(active, Vector.ConditionalSelect(sound, next, NotANumber), p);
-            active &= Vector.AndNot(sound, done);
+            T a = T.All(1.0) - (space * p) + (space * p * p);
+            T slope = (2.0 * space * p) - T.All(space);
+            T gradient = (a * slope * rearVariance) - ((a + (p * slope)) * along) + (p * gap);
+            T curvature = (((slope * slope) + (2.0 * space * a)) * rearVariance) - (((2.0 * slope) + (2.0 * space * p)) * along) + gap;
+            T change = gradient / curvature;
+            T next = p - change;
+            T sound = T.Exceeds(curvature, T.All(0.0)) & T.AtMost(T.Abs(next), T.All(ThinSolution.LargestPower));
+            p = T.Select(active, T.Select(sound, next, T.All(double.NaN)), p);
+            active &= sound & T.Exceeds(T.Abs(change), ThinPair.SmallStep * T.Abs(p));
         }
 
         return p;

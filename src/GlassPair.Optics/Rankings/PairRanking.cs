@@ -21,7 +21,7 @@ public static class PairRanking
         CandidatePool pool = new(picks.PoolSize, double.NegativeInfinity);
         screen.Run(pool, cancellation);
         PairScreen counted = screen;
-        while (!picks.TakeFrom(pool, c => Solve(request.Requirement, screen.Glasses[c.First], screen.Glasses[c.Second])) && pool.IsCut)
+        while (!picks.TakeFrom(pool, c => [screen.Glasses[c.First], screen.Glasses[c.Second]], g => Solve(request.Requirement, g[0], g[1])) && pool.IsCut)
         {
             // What is left must come from glasses that may stand in more pairs.
             screen = new PairScreen(

@@ -1,5 +1,6 @@
 using System.Numerics;
 using System.Runtime.CompilerServices;
+using System.Runtime.Intrinsics;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Requirements;
 
@@ -14,7 +15,6 @@ internal sealed class PairScreen
     private readonly double[] _included;
     private readonly double[] _keys;
     private readonly double _airSpace;
-    private readonly double _powerLimit;
     private readonly double _depth;
     private readonly long[] _dropped = new long[Enum.GetValues<PairDropReason>().Length];
 
@@ -25,7 +25,7 @@ internal sealed class PairScreen
     public PairScreen(PairColumns glasses, IReadOnlySet<GlassIndices>? included, ShortlistRequest request)
     {
         (_glasses, _request, _row) = (glasses, request, new PairFigures(glasses));
-        _keys = new double[_row.Rms.Length];
+        _keys = new double[Lanes512.Count];
         _included = new double[_row.Rms.Length];
         for (int j = 0; j < glasses.Count; j++)
         {
@@ -34,7 +34,6 @@ internal sealed class PairScreen
 
         Requirement requirement = request.Requirement;
         _airSpace = requirement.AirSpace.GetValueOrDefault();
-        _powerLimit = requirement.ElementPowerLimit ?? double.PositiveInfinity;
         _depth = 2.0 * requirement.Band.Design.Millimeters;
     }
 
@@ -58,9 +57,13 @@ internal sealed class PairScreen
         {
             cancellation.ThrowIfCancellationRequested();
             PairKernel.Fill(_glasses, front, _row);
-            if (Vector.IsHardwareAccelerated)
+            if (Vector512.IsHardwareAccelerated)
             {
-                ScreenVector(front, pool);
+                ScreenVector<Lanes512>(front, pool);
+            }
+            else if (Vector256.IsHardwareAccelerated)
+            {
+                ScreenVector<Lanes256>(front, pool);
             }
             else
             {
@@ -94,91 +97,77 @@ internal sealed class PairScreen
         }
     }
 
-    /// <summary>Vector twin of <see cref="ScreenScalar"/>: lane l holds partner rear + l.</summary>
+    /// <summary>Vector twin of <see cref="ScreenScalar"/>: lane l, and bit l of a mask, hold partner rear + l.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    public void ScreenVector(int front, CandidatePool pool)
+    public void ScreenVector<T>(int front, CandidatePool pool)
+        where T : unmanaged, ILanes<T>
     {
-        bool someIncluded = _included[front] == 0.0;
-        double expansion = _glasses.Expansion[front];
+        T zero = T.All(0.0);
+        T powerLimit = T.All(_glasses.PowerLimit);
+        T fNumber = T.All(_request.Requirement.FNumber);
+        double focal = _request.Requirement.FocalLength;
         double? expansionLimit = _request.Limits.ExpansionDifference;
-        var powerLimit = new Vector<double>(_powerLimit);
-        var fNumber = new Vector<double>(_request.Requirement.FNumber);
-        Counts counts = default;
-        for (int rear = front + 1; rear < _glasses.Count; rear += Vector<double>.Count)
+        bool isIncluded = _included[front] > 0.0;
+        for (int rear = front + 1; rear < _glasses.Count; rear += T.Count)
         {
-            Vector<long> open = Vector.LessThan(Vector<long>.Indices, new Vector<long>(_glasses.Count - rear));
-            if (someIncluded)
+            uint open = uint.MaxValue >> (32 - Math.Min(T.Count, _glasses.Count - rear));
+            if (!isIncluded)
             {
-                Drop(ref open, ref counts.NotIncluded, Vector.Equals(new Vector<double>(_included, rear), Vector<double>.Zero));
+                Drop(PairDropReason.NotIncluded, T.Bits(T.AreEqual(T.Load(_included, rear), zero)), ref open);
             }
 
             if (expansionLimit is { } most)
             {
-                Vector<double> difference = Vector.Abs(new Vector<double>(expansion) - new Vector<double>(_glasses.Expansion, rear));
-                Drop(ref open, ref counts.ExpansionUnknown, ~Vector.Equals(difference, difference));
-                Drop(ref open, ref counts.ExpansionDifference, Vector.GreaterThan(difference, new Vector<double>(most)));
+                T difference = T.Abs(T.All(_glasses.Expansion[front]) - T.Load(_glasses.Expansion, rear));
+                Drop(PairDropReason.ExpansionUnknown, ~T.Bits(T.AreEqual(difference, difference)), ref open);
+                Drop(PairDropReason.ExpansionDifference, T.Bits(T.Exceeds(difference, T.All(most))), ref open);
             }
 
-            var p1 = new Vector<double>(_row.FrontPower, rear);
-            Vector<long> unsolved = ~Vector.Equals(p1, p1);
-            if (_airSpace > 0.0 && (open & unsolved) != Vector<long>.Zero)
+            T p1 = T.Load(_row.FrontPower, rear);
+            uint unsolved = ~T.Bits(T.AreEqual(p1, p1));
+            if (_airSpace > 0.0 && (open & unsolved) != 0)
             {
                 // ThinPair.LargestAirSpace and IsTooLarge
-                Vector<double> root = Vector<double>.One - Vector.SquareRoot(new Vector<double>(_glasses.Abbe, rear) / new Vector<double>(_glasses.Abbe[front]));
-                Vector<double> largest = _request.Requirement.FocalLength * Vector.Min(Vector<double>.One, root * root);
-                Drop(ref open, ref counts.AirSpace, unsolved & Vector.GreaterThan(largest, Vector<double>.Zero) & Vector.GreaterThan(new Vector<double>(_airSpace), ThinPair.SureAirSpace * largest));
+                T root = T.All(1.0) - T.SquareRoot(T.Load(_glasses.Abbe, rear) / T.All(_glasses.Abbe[front]));
+                T largest = focal * T.Min(T.All(1.0), root * root);
+                T tooLarge = T.Exceeds(largest, zero) & T.Exceeds(T.All(_airSpace), ThinPair.SureAirSpace * largest);
+                Drop(PairDropReason.AirSpace, unsolved & T.Bits(tooLarge), ref open);
             }
 
-            Drop(ref open, ref counts.DispersionsAlike, unsolved);
-            Vector<double> largestPower = Vector.Max(Vector.Abs(p1), Vector.Abs(new Vector<double>(_row.RearPower, rear)));
-            Drop(ref open, ref counts.ElementPower, Vector.GreaterThan(largestPower, powerLimit));
-            if (open == Vector<long>.Zero)
+            Drop(PairDropReason.DispersionsAlike, unsolved, ref open);
+            T largestPower = T.Max(T.Abs(p1), T.Abs(T.Load(_row.RearPower, rear)));
+            Drop(PairDropReason.ElementPower, T.Bits(T.Exceeds(largestPower, powerLimit)), ref open);
+            if (open == 0)
             {
                 continue;
             }
 
-            counts.Feasible -= open;
-            Vector<double> limitedTo = Vector.SquareRoot(0.5 * new Vector<double>(_row.PeakToValley, rear) / new Vector<double>(_depth));
-            counts.Holding -= open & Vector.LessThanOrEqual(limitedTo, fNumber);
-            Vector<double> key = _request.RankBy switch
+            Feasible += BitOperations.PopCount(open);
+            T limitedTo = T.SquareRoot(0.5 * T.Load(_row.PeakToValley, rear) / T.All(_depth));
+            Holding += BitOperations.PopCount(open & T.Bits(T.AtMost(limitedTo, fNumber)));
+            T key = _request.RankBy switch
             {
-                RankBy.ColorResidual => new Vector<double>(_row.Rms, rear),
-                RankBy.ExpectedResidual => new Vector<double>(_row.ExpectedRms, rear),
-                _ => Vector.Abs(new Vector<double>(_row.SecondarySpectrum, rear)),
+                RankBy.ColorResidual => T.Load(_row.Rms, rear),
+                RankBy.ExpectedResidual => T.Load(_row.ExpectedRms, rear),
+                _ => T.Abs(T.Load(_row.SecondarySpectrum, rear)),
             };
-            open &= Vector.LessThanOrEqual(key, new Vector<double>(pool.Bound));
-            if (open != Vector<long>.Zero)
+            open &= T.Bits(T.AtMost(key, T.All(pool.Bound)));
+            if (open != 0)
             {
-                for (int lane = 0; lane < Vector<double>.Count; lane++)
+                key.Store(_keys, 0);
+                for (; open != 0; open &= open - 1)
                 {
-                    if (open[lane] != 0)
-                    {
-                        pool.Offer(key[lane], new Combination(front, rear + lane));
-                    }
+                    int lane = BitOperations.TrailingZeroCount(open);
+                    pool.Offer(_keys[lane], new Combination(front, rear + lane));
                 }
             }
         }
-
-        Take(counts);
     }
 
-    private static void Drop(ref Vector<long> open, ref Vector<long> count, Vector<long> which)
+    private void Drop(PairDropReason reason, uint which, ref uint open)
     {
-        // a lane that is set holds −1
-        count -= open & which;
-        open = Vector.AndNot(open, which);
-    }
-
-    private void Take(in Counts counts)
-    {
-        Feasible += Vector.Sum(counts.Feasible);
-        Holding += Vector.Sum(counts.Holding);
-        _dropped[(int)PairDropReason.NotIncluded] += Vector.Sum(counts.NotIncluded);
-        _dropped[(int)PairDropReason.ExpansionUnknown] += Vector.Sum(counts.ExpansionUnknown);
-        _dropped[(int)PairDropReason.ExpansionDifference] += Vector.Sum(counts.ExpansionDifference);
-        _dropped[(int)PairDropReason.AirSpace] += Vector.Sum(counts.AirSpace);
-        _dropped[(int)PairDropReason.DispersionsAlike] += Vector.Sum(counts.DispersionsAlike);
-        _dropped[(int)PairDropReason.ElementPower] += Vector.Sum(counts.ElementPower);
+        _dropped[(int)reason] += BitOperations.PopCount(open & which);
+        open &= ~which;
     }
 
     private PairDropReason? ReasonAgainst(int front, int rear)
@@ -200,18 +189,6 @@ internal sealed class PairScreen
             return ThinPair.IsTooLarge(_airSpace, largest) ? PairDropReason.AirSpace : PairDropReason.DispersionsAlike;
         }
 
-        return Math.Max(Math.Abs(p1), Math.Abs(_row.RearPower[rear])) > _powerLimit ? PairDropReason.ElementPower : null;
-    }
-
-    private struct Counts
-    {
-        public Vector<long> Feasible;
-        public Vector<long> Holding;
-        public Vector<long> NotIncluded;
-        public Vector<long> ExpansionUnknown;
-        public Vector<long> ExpansionDifference;
-        public Vector<long> AirSpace;
-        public Vector<long> DispersionsAlike;
-        public Vector<long> ElementPower;
+        return Math.Max(Math.Abs(p1), Math.Abs(_row.RearPower[rear])) > _glasses.PowerLimit ? PairDropReason.ElementPower : null;
     }
 }

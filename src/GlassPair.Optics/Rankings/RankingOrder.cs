@@ -18,7 +18,7 @@ internal static class RankingOrder
         larger <= LargestTieOf(smaller) && TwelveDigits(smaller) == TwelveDigits(larger);
 
     /// <summary>Puts solutions whose keys tie into their order.</summary>
-    public static IEnumerable<ThinSolution> OfTied(IEnumerable<ThinSolution> solutions) => solutions
+    public static IEnumerable<ThinSolution> OfTied(ThinSolution[] solutions) => solutions.Length <= 1 ? solutions : solutions
         .OrderBy(s => TwelveDigits(s.SumOfPowers))
         .ThenBy(s => string.Join(' ', s.Elements.Select(e => e.Glass.Id)), StringComparer.Ordinal);
 
