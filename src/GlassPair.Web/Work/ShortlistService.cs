@@ -1,4 +1,3 @@
-using System.Collections.Concurrent;
 using System.Diagnostics;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Rankings;
@@ -16,18 +15,31 @@ public sealed record ShortlistAnswer(Stock Stock, Shortlist Shortlist, TimeSpan 
 /// <param name="gate">The gate for heavy work.</param>
 public sealed class ShortlistService(WorkGate gate)
 {
-    private const int MostTables = 32;
-    private readonly ConcurrentDictionary<(string Stock, Band Band), IndexTable> _tables = new();
+    /// <summary>How many tables are kept: about 0.5 MB each.</summary>
+    public const int MostTables = 32;
 
-    /// <summary>Gets the indices of a stock over a band; the last few are kept.</summary>
+    // The last used stands first.
+    private readonly LinkedList<((string Stock, Band Band) Key, Lazy<IndexTable> Table)> _tables = [];
+    private readonly Lock _lock = new();
+
+    /// <summary>Gets the indices of a stock over a band. The last used tables are kept; of callers that ask for the same new one, one evaluates it and the others wait.</summary>
     public IndexTable TableOf(Stock stock, Band band)
     {
-        if (_tables.Count >= MostTables)
+        (string, Band) key = (stock.Id, band);
+        Lazy<IndexTable> table;
+        lock (_lock)
         {
-            _tables.Clear();
+            var known = _tables.FirstOrDefault(t => t.Key.Equals(key));
+            table = known.Table ?? new Lazy<IndexTable>(() => IndexTable.Of(stock.Glasses, band));
+            _tables.Remove(known);
+            _tables.AddFirst((key, table));
+            if (_tables.Count > MostTables)
+            {
+                _tables.RemoveLast();
+            }
         }
 
-        return _tables.GetOrAdd((stock.Id, band), _ => IndexTable.Of(stock.Glasses, band));
+        return table.Value;
     }
 
     /// <summary>Ranks the pairs of a stock.</summary>

@@ -1,3 +1,4 @@
+using System.Runtime.Intrinsics;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
@@ -21,6 +22,16 @@ public sealed class PairKernelTests
 
             return data;
         }
+    }
+
+    [Fact]
+    public void Widths_SwitchedOffInTheEnvironment_AreNotUsed()
+    {
+        // test.sh repeats these tests so; a switch under a new name would go unnoticed otherwise
+        Assert.False(Vector512.IsHardwareAccelerated && (IsOff("DOTNET_EnableAVX512") || IsOff("DOTNET_EnableAVX2")));
+        Assert.False(Vector256.IsHardwareAccelerated && IsOff("DOTNET_EnableAVX2"));
+
+        static bool IsOff(string name) => Environment.GetEnvironmentVariable(name) == "0";
     }
 
     [Theory, MemberData(nameof(LengthsAndCases))]
