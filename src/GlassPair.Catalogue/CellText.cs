@@ -52,10 +52,10 @@ internal static class CellText
         return shown.ToString();
     }
 
-    private static bool IsInvisible(Rune rune) => !rune.IsAscii
-        ? rune != Rune.ReplacementChar && rune.Value != 0x20 && (Rune.IsWhiteSpace(rune) || Rune.GetUnicodeCategory(rune) is UnicodeCategory.Control
-            or UnicodeCategory.Format or UnicodeCategory.PrivateUse or UnicodeCategory.OtherNotAssigned)
-        : rune.Value is < 0x20 or 0x7F;
+    private static bool IsInvisible(Rune rune) => rune.IsAscii
+        ? rune.Value is < 0x20 or 0x7F
+        : Rune.IsWhiteSpace(rune) || Rune.GetUnicodeCategory(rune) is UnicodeCategory.Control
+            or UnicodeCategory.Format or UnicodeCategory.PrivateUse or UnicodeCategory.OtherNotAssigned;
 
     private static string CodePoint(Rune rune) => "U+" + rune.Value.ToString("X4", CultureInfo.InvariantCulture);
 }

@@ -157,16 +157,14 @@ internal sealed class CsvRow(
         }
 
         string cell = cells[index];
-        if (cell.Length == 0 || (cell[0] < 128 && cell[^1] < 128))
-        {
-            return cell;
-        }
-
         string trimmed = cell.Trim();
         if (trimmed.Length < cell.Length)
         {
             cells[index] = trimmed;
-            issues.Note(file, line, "Unusual spaces before or after the value were left out.", column.Name, trimmed);
+            if (trimmed.Length < cell.Trim(UsualSpaces).Length)
+            {
+                issues.Note(file, line, "Unusual spaces before or after the value were left out.", column.Name, trimmed);
+            }
         }
 
         return trimmed;

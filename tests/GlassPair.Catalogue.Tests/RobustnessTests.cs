@@ -10,7 +10,7 @@ public class RobustnessTests
         "maker,name,form,range_from_nm,range_to_nm,b1,c1_um2,index_at_nm,nd,supply\r\nschott,A,sellmeier,400,700,1.25,0.01,,1.5,listed\n\"x\",B,measured,,,,,400 1.53; 500 1.52; 600 1.515; 700 1.512,,listed\n");
 
     [Fact]
-    public void Read_AnyBytes_EndsInAStockOrAnError() => Gen.Byte.Array[0, 400].Sample(Check, iter: 5000, seed: "0000KOIKJ05b");
+    public void Read_AnyBytes_EndsInAStockOrAnError() => Gen.Byte.Array[0, 400].Sample(Check, iter: 5000);
 
     [Fact]
     public void Read_GoodFileWithBytesChanged_EndsInAStockOrAnError() =>
@@ -31,8 +31,7 @@ public class RobustnessTests
 
                 Check([.. bytes]);
             },
-            iter: 20_000,
-            seed: "0000KOIKJ05c");
+            iter: 20_000);
 
     private static void Check(byte[] bytes)
     {

@@ -31,10 +31,10 @@ internal static class GlassEndpoints
     public static Results<Ok<StockJson[]>, ProblemHttpResult> ListStocks(HttpRequest request, StockLibrary library)
     {
         var query = new QueryReading(request.Query);
-        Stock stock = library.Current;
+        Stock current = library.Current;
         return query.Faults.Any
             ? Problems.Faulty(query.Faults)
-            : TypedResults.Ok(new StockJson[] { new(stock.Id, stock.Title, stock.Glasses.Length, IsDefault: true) });
+            : TypedResults.Ok<StockJson[]>([.. library.All.Select(s => new StockJson(s.Id, s.Title, s.Glasses.Length, IsDefault: s == current))]);
     }
 
     /// <summary>Lists glasses with values computed from their coefficients, a part at a time.</summary>

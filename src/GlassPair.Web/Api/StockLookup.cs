@@ -20,7 +20,7 @@ internal static class StockLookup
             return true;
         }
 
-        problem = Problems.UnknownStock(id, [library.Current.Id]);
+        problem = Problems.UnknownStock(id, library.All.Select(s => s.Id));
         return false;
     }
 
