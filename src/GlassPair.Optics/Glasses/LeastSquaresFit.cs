@@ -8,7 +8,7 @@ namespace GlassPair.Optics.Glasses;
 /// </remarks>
 internal sealed class LeastSquaresFit
 {
-    /// <summary>No table states an index better than this: smaller residuals are taken for it.</summary>
+    /// <summary>No index is measured better than this: smaller errors count as this.</summary>
     private const double FinestIndex = 1e-6;
 
     /// <summary>The share of sound tables in which chance alone may make a value stand out.</summary>
@@ -38,7 +38,7 @@ internal sealed class LeastSquaresFit
         get
         {
             int points = Residuals.Length;
-            double variance = (SumOfSquares / (points - Parameters)) + (FinestIndex * FinestIndex / 100.0);
+            double variance = (SumOfSquares / (points - Parameters)) + (FinestIndex * FinestIndex);
             return (points * Math.Log(variance)) + (Parameters * Math.Log(points));
         }
     }

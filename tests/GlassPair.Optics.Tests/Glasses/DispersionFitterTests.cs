@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using System.Globalization;
+using CsCheck;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Spectrum;
 using MathNet.Numerics.LinearAlgebra;
@@ -231,6 +232,50 @@ public sealed class DispersionFitterTests
         Assert.Contains(
             Fitted(DispersionFitter.Fit(TableOf(steep, 0.4, 0.7, 12), DispersionForm.Sellmeier, 1)).Warnings,
             w => w.StartsWith("A pole stands at 370 nm", StringComparison.Ordinal));
+    }
+
+    [Fact]
+    public void Fit_AnyTable_IsAFormulaThatHoldsOrASentence() => Law.Holds(
+        Gen.Select(Gen.Double[100.0, 20_000.0], Gen.Double[1.0, 5.0]).Array[0, 30],
+        table =>
+        {
+            MeasuredIndex[] measured = [.. table.Select(t => new MeasuredIndex(Wavelength.FromNanometers(t.Item1), t.Item2))];
+            foreach (FitOutcome outcome in new[]
+            {
+                DispersionFitter.Fit(measured),
+                DispersionFitter.Fit(measured, DispersionForm.Sellmeier, 4),
+                DispersionFitter.Fit(measured, DispersionForm.PowerSeries),
+                DispersionFitter.FitLeavingOutMisprints(measured),
+            })
+            {
+                if (outcome is DispersionFit fit)
+                {
+                    Assert.Null(fit.Formula.FindFault(fit.Range));
+                    Assert.True(double.IsFinite(fit.RmsResidual));
+                    Assert.Equal(measured.Length, fit.Measured.Length + fit.LeftOut.Length);
+                }
+                else
+                {
+                    Assert.All(Refused(outcome), f => Assert.EndsWith(".", f.Sentence, StringComparison.Ordinal));
+                    Assert.NotEmpty(Refused(outcome));
+                }
+            }
+        });
+
+    [Fact]
+    public void Fit_PublishedDataSheet_FindsTheMakersCurve()
+    {
+        // the printed indices of N-BK7 (indices.csv) against the maker's own coefficients: within the rounding of the print at every wavelength between
+        MeasuredIndex[] printed = [.. Published.Rows("indices.csv").Where(r => r["glass"] == "schott/N-BK7")
+            .DistinctBy(r => r["nanometers"])
+            .Select(r => new MeasuredIndex(Wavelength.FromNanometers(r.Number("nanometers")), r.Number("index")))];
+
+        DispersionFit fit = Fitted(DispersionFitter.Fit(printed, DispersionForm.Sellmeier, 3));
+
+        Assert.Equal(18, fit.Measured.Length);
+        Assert.True(Math.Abs(fit.WorstResidual) <= HalfFifthDigit, $"{fit.WorstResidual}");
+        Assert.All(TableOf(s_borosilicateCrown, 0.3651, 2.325, 200), m => Assert.Equal(
+            m.Index, Math.Sqrt(fit.Formula.IndexSquaredAt(m.Wavelength.Micrometers)), HalfFifthDigit));
     }
 
     private static DispersionFit Fitted(FitOutcome outcome) => Assert.IsType<DispersionFit>(outcome);
