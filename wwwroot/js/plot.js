@@ -105,7 +105,7 @@ function resize(chart) {
 /** Makes the picture as large as its frame. */
 async function fit(chart) {
   const { clientWidth: width, clientHeight: height, _fullLayout: drawn } = chart.plot;
-  if (width === 0 || (width === drawn.width && height === drawn.height)) return;
+  if (width === 0 || (Math.abs(width - drawn.width) < 1 && Math.abs(height - drawn.height) < 1)) return; // plotly keeps fractions of a pixel
   await Plotly.Plots.resize(chart.plot);
   await drawShapes(chart);
 }
@@ -218,7 +218,7 @@ function labelsOf(chart) {
   const bounds = { x: 2, y: 2, w: xaxis._length - 4, h: yaxis._length - 4 };
   const style = getComputedStyle(chart.frame);
   const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
-  const measure = measureWith(`600 ${size}px ${style.fontFamily}`);
+  const measure = (text, isBold) => widthOf(text, `${isBold ? 700 : 400} ${size}px ${style.fontFamily}`);
   const halo = paint(chart, '--pane');
   const obstacles = {
     boxes: chart.figure.disks.map(disk => { const [x, y] = toPixel(disk.x, disk.y); return { x: x - disk.radius, y: y - disk.radius, w: 2 * disk.radius, h: 2 * disk.radius }; }),
@@ -228,7 +228,7 @@ function labelsOf(chart) {
   };
   const shapes = [];
   const put = (lines, candidates, color, isBold) => {
-    const w = Math.max(...lines.map(measure)) + 2;
+    const w = Math.max(...lines.map((line, i) => measure(line, isBold && i === 0))) + 2;
     const h = lines.length * size * leading;
     const best = candidates(w, h).map(({ x, y, cost = 0 }) => ({ x, y, w, h, cost }))
       .map(box => ({ ...box, cost: box.cost + costOf(box, bounds, obstacles) }))
@@ -309,16 +309,14 @@ function clip([x0, y0], [x1, y1], box) {
 
 const canvas = document.createElement('canvas').getContext('2d');
 const widths = new Map();
-function measureWith(font) {
-  return text => {
-    const key = font + text;
-    if (!widths.has(key)) {
-      if (widths.size > 2000) widths.clear();
-      canvas.font = font;
-      widths.set(key, canvas.measureText(text).width);
-    }
-    return widths.get(key);
-  };
+function widthOf(text, font) {
+  const key = font + text;
+  if (!widths.has(key)) {
+    if (widths.size > 2000) widths.clear();
+    canvas.font = font;
+    widths.set(key, canvas.measureText(text).width);
+  }
+  return widths.get(key);
 }
 
 // --- pointer

@@ -68,6 +68,15 @@ public sealed class FocalShiftChartTests : ChartTestBase
     }
 
     [Fact]
+    public void Render_SameSolutions_SendsNothing()
+    {
+        ThinSolution chosen = Solve(Asked(), "schott/N-BK7", "schott/F2");
+        IRenderedComponent<FocalShiftChart> chart = Draw(chosen);
+        chart.Render(p => p.Add(c => c.Chosen, chosen).Add(c => c.Stale, true));
+        Assert.Single(Sent);
+    }
+
+    [Fact]
     public void ListAsText_Pinned_HasAColumnOfItsOwn()
     {
         IRenderedComponent<FocalShiftChart> chart = Draw(Solve(Asked(), "ohara/S-FPL53", "schott/N-LAK10"), Solve(Asked(), "schott/N-BK7", "schott/F2"));

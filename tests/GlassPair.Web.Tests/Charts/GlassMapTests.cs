@@ -135,6 +135,16 @@ public sealed class GlassMapTests : ChartTestBase
     }
 
     [Fact]
+    public void Render_NothingOfItsOwnChanged_SendsNothing()
+    {
+        ImmutableArray<Candidate> candidates = Candidates(Asked(), 10);
+        IRenderedComponent<GlassMap> map = RenderMap(p => p.Add(m => m.Candidates, candidates));
+        map.Render(p => p.Add(m => m.Candidates, candidates).Add(m => m.Stale, true));
+        Assert.Single(Sent);
+        Assert.Contains("stale", map.Find("figure").ClassList);
+    }
+
+    [Fact]
     public async Task OnPick_Dot_ReportsThatGlass()
     {
         Glass? picked = null;

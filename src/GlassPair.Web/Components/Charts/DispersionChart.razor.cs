@@ -12,6 +12,7 @@ public sealed partial class DispersionChart : ComponentBase
 {
     private const int Steps = 160;
     private ImmutableArray<SpectralLine> _lines = [];
+    private Glass? _shown;
     private PlotFigure _figure = null!;
     private string _label = "";
 
@@ -21,6 +22,12 @@ public sealed partial class DispersionChart : ComponentBase
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        if (ReferenceEquals(_shown, Glass))
+        {
+            return;
+        }
+
+        _shown = Glass;
         _lines = [.. WavelengthText.Lines.Where(l => Glass.Range.Contains(l.Wavelength))];
         (double from, double to) = (Glass.Range.Shortest.Nanometers, Glass.Range.Longest.Nanometers);
 

@@ -7,6 +7,7 @@ namespace GlassPair.Web.Components.Charts;
 /// <summary>The focal shift of a combination against wavelength, over the depth of focus.</summary>
 public sealed partial class FocalShiftChart : ComponentBase
 {
+    private (ThinSolution? Chosen, ThinSolution? Pinned) _shown;
     private FocalShiftCurve _chosen = null!;
     private FocalShiftCurve? _pinned;
     private PlotFigure _figure = null!;
@@ -24,9 +25,15 @@ public sealed partial class FocalShiftChart : ComponentBase
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        if (_shown is var (chosen, pinned) && ReferenceEquals(chosen, Chosen) && ReferenceEquals(pinned, Pinned))
+        {
+            return;
+        }
+
+        _shown = (Chosen, Pinned);
         _chosen = FocalShiftCurve.Of(Chosen);
         _pinned = Pinned is null ? null : FocalShiftCurve.Of(Pinned);
-        _figure = FocalShiftFigure.Draw(_chosen, _pinned, Chosen.Requirement.Band, Pinned is null ? "" : Name(Pinned));
+        _figure = FocalShiftFigure.Draw(_chosen, _pinned, Chosen.Requirement, Pinned is null ? "" : Name(Pinned));
         _label = Description();
     }
 

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using GlassPair.Optics.Color;
+using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
 using GlassPair.Web.Addresses;
 using GlassPair.Web.Figures;
@@ -13,8 +14,9 @@ internal static class FocalShiftFigure
     private const double MostOfDepth = 4.0;
 
     /// <summary>Draws the curve of the chosen combination over the depth of focus, and the pinned one dashed.</summary>
-    public static PlotFigure Draw(FocalShiftCurve chosen, FocalShiftCurve? pinned, Band band, string pinnedName)
+    public static PlotFigure Draw(FocalShiftCurve chosen, FocalShiftCurve? pinned, Requirement requirement, string pinnedName)
     {
+        Band band = requirement.Band;
         double shifts = chosen.Samples.Max(s => Math.Abs(s.Shift));
         double depth = chosen.Samples.Max(s => s.DepthOfFocus);
 
@@ -65,7 +67,7 @@ internal static class FocalShiftFigure
             Labels = seen is { } at
                 ? [new PlotLabel(at.Wavelength.Nanometers, Height(at.Shift), pinnedName + ", pinned") { Color = "--ink-2" }]
                 : [],
-            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus ±2λN² (±{FigureText.ShortLength(depth)} at most)"],
+            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus, ±{FigureText.ShortLength(requirement.DepthOfFocus)} at {LineName(band.Design)}"],
         };
 
         static string LineName(Wavelength wavelength) => WavelengthText.LineAt(wavelength)?.Symbol ?? FigureText.Fixed(wavelength.Nanometers, 0);

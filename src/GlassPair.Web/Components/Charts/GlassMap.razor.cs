@@ -18,6 +18,7 @@ public sealed partial class GlassMap : ComponentBase
     private const int MostPartnersListed = 100;
     private static readonly (MapAxes Axes, string Name)[] AxesNames = [(MapAxes.PartialDispersion, "P over V"), (MapAxes.Index, "n over V")];
     private readonly GlassMapFigure _drawing = new();
+    private (IndexTable, Requirement, GlassLimits, ThinSolution?, ThinSolution?, Glass?, Candidate?, MapAxes) _shown;
     private ImmutableArray<Candidate> _drawn = [];
     private PlotFigure _figure = null!;
     private string _label = "";
@@ -69,9 +70,15 @@ public sealed partial class GlassMap : ComponentBase
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
-        _drawn = [.. Candidates.Take(MostChords)];
-        _figure = _drawing.Draw(this, _drawn);
-        _label = Description();
+        // A page renders for many reasons; the map is drawn again only for one of its own.
+        var shown = (Table, Requirement, Limits, Chosen, Pinned, ChosenGlass, Highlighted, Axes);
+        ImmutableArray<Candidate> drawn = [.. Candidates.Take(MostChords)];
+        if (shown != _shown || !drawn.AsEnumerable().SequenceEqual(_drawn, ReferenceEqualityComparer.Instance))
+        {
+            (_shown, _drawn) = (shown, drawn);
+            _figure = _drawing.Draw(this, _drawn);
+            _label = Description();
+        }
     }
 
     private static string PairName(ThinSolution solution) => string.Join(" + ", solution.Elements.Select(e => e.Glass.Name));

@@ -1,6 +1,7 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using GlassPair.Optics.Color;
+using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
@@ -18,6 +19,7 @@ internal sealed class GlassMapFigure
     private PlotTrace _usable = Dots([], "--dot", 4.0);
     private PlotTrace _partners = Dots([], "--accent", 5.5);
     private MapWindow? _window;
+    private (IndexTable, Requirement, GlassLimits, Glass?) _sought;
 
     /// <summary>Gets the glass whose partners are shown; null where none is.</summary>
     public GlassIndices? Glass { get; private set; }
@@ -38,7 +40,13 @@ internal sealed class GlassMapFigure
 
         Requirement requirement = map.Requirement;
         Glass = map.ChosenGlass is { } chosen ? map.Table.Rows.FirstOrDefault(r => r.Glass.Id == chosen.Id) : map.Chosen?.Elements.MaxBy(e => e.AbbeNumber);
-        Partners = Glass is null ? [] : Optics.Rankings.Partners.HoldingWith(map.Table, requirement, map.Limits, Glass);
+        var sought = (map.Table, requirement, map.Limits, Glass?.Glass);
+        if (sought != _sought)
+        {
+            _sought = sought;
+            Partners = Glass is null ? [] : Optics.Rankings.Partners.HoldingWith(map.Table, requirement, map.Limits, Glass);
+        }
+
         _usable = Kept(_usable, Dots(map.Table.Rows.Where(r => map.Limits.ReasonAgainst(r.Glass) is null).Select(Place), "--dot", 4.0));
         _partners = Kept(_partners, Dots(Partners.Select(Place), "--accent", 5.5));
 

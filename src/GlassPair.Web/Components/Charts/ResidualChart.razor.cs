@@ -10,6 +10,7 @@ public sealed partial class ResidualChart : ComponentBase
 {
     private const double MostOfKept = 3.0;
     private ImmutableArray<Residual> _residuals = [];
+    private DispersionFit? _shown;
     private PlotFigure _figure = null!;
     private string _label = "";
 
@@ -19,6 +20,12 @@ public sealed partial class ResidualChart : ComponentBase
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        if (ReferenceEquals(_shown, Fit))
+        {
+            return;
+        }
+
+        _shown = Fit;
         Residual[] kept = [.. Fit.Measured.Zip(Fit.Residuals, (measured, value) => new Residual(measured, value, null))];
         Residual[] leftOut = [.. Fit.LeftOut.Select(l => new Residual(l.Measured, l.Residual, l.Reason))];
         _residuals = [.. kept.Concat(leftOut).OrderBy(r => r.Measured.Wavelength)];

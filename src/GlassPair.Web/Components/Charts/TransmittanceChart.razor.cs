@@ -11,6 +11,7 @@ namespace GlassPair.Web.Components.Charts;
 public sealed partial class TransmittanceChart : ComponentBase
 {
     private ImmutableArray<(Wavelength Wavelength, double Value)> _stated = [];
+    private (Glass, double) _shown;
     private PlotFigure? _figure;
     private string _label = "";
 
@@ -23,6 +24,12 @@ public sealed partial class TransmittanceChart : ComponentBase
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        if (_shown == (Glass, Thickness))
+        {
+            return;
+        }
+
+        _shown = (Glass, Thickness);
         _stated =
         [
             .. Glass.Extinction
