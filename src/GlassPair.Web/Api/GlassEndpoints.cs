@@ -1,3 +1,4 @@
+using System.Diagnostics.CodeAnalysis;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Spectrum;
@@ -18,6 +19,13 @@ internal static class GlassEndpoints
     private static readonly QueryParameter Nm = new(
         "nm", QueryKind.Numbers, "Wavelengths, nm, separated by commas, 1 to 1,000 of them.", Wavelength.MinNanometers, Wavelength.MaxNanometers, 1_000, IsRequired: true);
 
+    private static readonly QueryParameter Temperature = new(
+        "temperatureC",
+        QueryKind.Number,
+        "Temperature of glass and air, degrees Celsius; left out, the reference temperature of the glass. Makers state their coefficients for 365 nm to 1014 nm; past that they are extrapolated.",
+        AirIndex.MinCelsius,
+        AirIndex.MaxCelsius);
+
     /// <summary>Gets the parameters of <see cref="ListGlasses"/>.</summary>
     public static QueryParameter[] ListParameters { get; } = [StockId, Maker, SupplyStates, Search, Take, Skip];
 
@@ -25,9 +33,9 @@ internal static class GlassEndpoints
     public static QueryParameter[] GlassParameters { get; } = [StockId];
 
     /// <summary>Gets the parameters of <see cref="ShowIndex"/>.</summary>
-    public static QueryParameter[] IndexParameters { get; } = [Nm, StockId];
+    public static QueryParameter[] IndexParameters { get; } = [Nm, Temperature, StockId];
 
-    /// <summary>Lists the stocks served.</summary>
+    /// <summary>Lists the stocks served: the default one, and those it has replaced that are at hand.</summary>
     public static Results<Ok<StockJson[]>, ProblemHttpResult> ListStocks(HttpRequest request, StockLibrary library)
     {
         var query = new QueryReading(request.Query);
@@ -63,7 +71,8 @@ internal static class GlassEndpoints
                 && (supply is null || supply.Contains(g.Supply))
                 && g.Id.Contains(search, StringComparison.OrdinalIgnoreCase)),
         ];
-        return TypedResults.Ok(new GlassPageJson(stock.Id, matches.Length, skip, [.. matches.Skip(skip).Take(take).Select(g => new GlassJson(g))]));
+        ILookup<DispersionFormula, string> ids = IdsByFormula(stock);
+        return TypedResults.Ok(new GlassPageJson(stock.Id, matches.Length, skip, [.. matches.Skip(skip).Take(take).Select(g => new GlassJson(g, stock, ids))]));
     }
 
     /// <summary>Shows one glass with values computed from its coefficients.</summary>
@@ -75,11 +84,13 @@ internal static class GlassEndpoints
     public static Results<Ok<GlassJson>, ProblemHttpResult> ShowGlass(string maker, string name, HttpRequest request, StockLibrary library)
     {
         var query = new QueryReading(request.Query, GlassParameters);
-        return TryFind(maker, name, query, library, out Glass? glass, out ProblemHttpResult? problem) ? TypedResults.Ok(new GlassJson(glass!)) : problem!;
+        return TryFind(maker, name, query, library, out (Stock Stock, Glass Glass) found, out ProblemHttpResult? problem)
+            ? TypedResults.Ok(new GlassJson(found.Glass, found.Stock, IdsByFormula(found.Stock)))
+            : problem;
     }
 
     /// <summary>Evaluates the index of one glass.</summary>
-    /// <remarks>422 names glass, wavelength, and range where the glass has no index.</remarks>
+    /// <remarks>The index is relative to air of the same temperature and 101,325 Pa. 422 names glass, wavelength, and range where the glass has no index, or says that its temperature coefficients are not known.</remarks>
     /// <param name="maker">The maker.</param>
     /// <param name="name">The maker's name of the glass.</param>
     /// <param name="request">The call.</param>
@@ -88,30 +99,50 @@ internal static class GlassEndpoints
     {
         var query = new QueryReading(request.Query, IndexParameters);
         double[] nm = query.Numbers(Nm);
-        if (!TryFind(maker, name, query, library, out Glass? glass, out ProblemHttpResult? problem))
+        double? celsius = query.Number(Temperature);
+        if (!TryFind(maker, name, query, library, out (Stock Stock, Glass Glass) found, out ProblemHttpResult? problem))
         {
-            return problem!;
+            return problem;
         }
 
+        Glass glass = found.Glass;
         Wavelength[] wavelengths = [.. nm.Select(Wavelength.FromNanometers)];
-        (Glass, Wavelength)[] misses = [.. wavelengths.Where(w => !glass!.Range.Contains(w)).Select(w => (glass!, w))];
-        return misses.Length > 0
-            ? Problems.OutOfRange(misses)
-            : TypedResults.Ok(new IndexJson(nm, [.. wavelengths.Select(w => glass!.IndexAt(w))]));
+        Wavelength[] misses = [.. wavelengths.Where(w => !glass.Range.Contains(w))];
+        if (misses.Length > 0)
+        {
+            return Problems.OutOfRange([.. misses.Select(w => (glass, w))]);
+        }
+
+        IndexAtTemperature?[] heated = [.. wavelengths.Select(w => (celsius ?? glass.ReferenceCelsius) is { } c ? IndexAtTemperature.TryOf(glass, w, c) : null)];
+        return celsius is not null && heated.Contains(null)
+            ? Problems.NoTemperature(glass, [.. wavelengths.Where((_, i) => heated[i] is null)])
+            : TypedResults.Ok(new IndexJson(
+                nm,
+                [.. wavelengths.Select((w, i) => celsius is null ? glass.IndexAt(w) : heated[i]!.Relative)],
+                [.. heated.Select(h => h?.AbsoluteRatePerKelvin)],
+                [.. heated.Select(h => h?.RelativeRatePerKelvin)],
+                celsius ?? glass.ReferenceCelsius));
     }
 
+    private static ILookup<DispersionFormula, string> IdsByFormula(Stock stock) => stock.Glasses.ToLookup(g => g.Formula, g => g.Id);
+
     private static bool TryFind(
-        string maker, string name, QueryReading query, StockLibrary library, out Glass? glass, out ProblemHttpResult? problem)
+        string maker,
+        string name,
+        QueryReading query,
+        StockLibrary library,
+        out (Stock Stock, Glass Glass) found,
+        [NotNullWhen(false)] out ProblemHttpResult? problem)
     {
-        glass = null;
+        found = default;
         string? id = query.Text(StockId);
         if (query.Faults.Any)
         {
             problem = Problems.Faulty(query.Faults);
         }
-        else if (library.TryFindStock(id, out Stock? stock, out problem) && stock.TryFindAll([$"{maker}/{name}"], out Glass[] found, out problem))
+        else if (library.TryFindStock(id, out Stock? stock, out problem) && stock.TryFindAll([$"{maker}/{name}"], out Glass[] glasses, out problem))
         {
-            glass = found[0];
+            found = (stock, glasses[0]);
         }
 
         return problem is null;

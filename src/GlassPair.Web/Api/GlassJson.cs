@@ -1,3 +1,4 @@
+using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Spectrum;
 
@@ -9,7 +10,10 @@ public sealed record GlassJson
     private readonly FormulaJson _formula;
 
     /// <summary>Writes a glass.</summary>
-    public GlassJson(Glass glass)
+    /// <param name="glass">The glass.</param>
+    /// <param name="stock">The stock that it is of.</param>
+    /// <param name="ids">The ids of the stock's glasses by their formulas.</param>
+    public GlassJson(Glass glass, Stock stock, ILookup<DispersionFormula, string> ids)
     {
         (Maker, Name) = (glass.Maker, glass.Name);
         _formula = new FormulaJson(glass.Formula);
@@ -31,6 +35,8 @@ public sealed record GlassJson
         DensityGPerCm3 = glass.DensityGramsPerCm3;
         Stated = glass.Stated;
         Resistance = glass.Resistance;
+        SameAs = [.. ids[glass.Formula].Where(id => id != glass.Id)];
+        Remarks = [.. stock.RemarksOn(glass).Select(r => r.Message)];
         Fit = glass.Fit is { } fit ? new FitJson(fit) : null;
     }
 
@@ -105,6 +111,12 @@ public sealed record GlassJson
     /// <summary>Gets the maker's resistance classes; the tests differ between makers.</summary>
     public ResistanceClasses Resistance { get; }
 
+    /// <summary>Gets the other glasses of the stock with identical coefficients.</summary>
+    public string[] SameAs { get; }
+
+    /// <summary>Gets what was noticed when the catalogue was read, such as stated values that disagree with the formula.</summary>
+    public string[] Remarks { get; }
+
     /// <summary>Gets the fit behind the formula where the maker states measured indices only.</summary>
     public FitJson? Fit { get; }
 
@@ -118,10 +130,13 @@ public sealed record GlassJson
 /// <param name="Glasses">The glasses, in ordinal order of <c>maker/name</c>.</param>
 public sealed record GlassPageJson(string Stock, int Total, int Skip, GlassJson[] Glasses);
 
-/// <summary>Indices of a glass.</summary>
+/// <summary>Indices of a glass at a temperature.</summary>
 /// <param name="Nm">The wavelengths, nm.</param>
-/// <param name="Index">The index at each, relative to air of the same temperature and 101 325 Pa.</param>
-public sealed record IndexJson(double[] Nm, double[] Index);
+/// <param name="Index">The index at each, relative to air of the same temperature and 101,325 Pa.</param>
+/// <param name="DnDtAbsolutePerK">The change of the index relative to vacuum, per kelvin; null where the catalogue states no coefficients.</param>
+/// <param name="DnDtRelativePerK">The change of the index relative to air that warms with the glass, per kelvin; null where the catalogue states no coefficients.</param>
+/// <param name="TemperatureC">The temperature, degrees Celsius; null where the catalogue does not state the glass's reference temperature.</param>
+public sealed record IndexJson(double[] Nm, double[] Index, double?[] DnDtAbsolutePerK, double?[] DnDtRelativePerK, double? TemperatureC);
 
 /// <summary>A stock that is served.</summary>
 /// <param name="Id">Its id: the start of the hash of its content.</param>

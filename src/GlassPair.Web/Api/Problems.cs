@@ -41,6 +41,14 @@ public static class Problems
         statusCode: StatusCodes.Status422UnprocessableEntity,
         extensions: [new("outOfRange", misses.Select(m => new IndexMiss(m.Glass.Id, m.Wavelength.Nanometers, RangeNm(m.Glass.Range))).ToArray())]);
 
+    /// <summary>422: the maker says too little of a glass to take its index to another temperature.</summary>
+    public static ProblemHttpResult NoTemperature(Glass glass, IReadOnlyList<Wavelength> wavelengths) => TypedResults.Problem(
+        title: "The index cannot be taken to another temperature.",
+        detail: glass is { Thermal: null } or { ReferenceCelsius: null }
+            ? $"The catalogue states no temperature coefficients of {glass.Id}: leave temperatureC out for the index at the reference temperature."
+            : $"The temperature coefficients of {glass.Id} say nothing at {string.Join(", ", wavelengths)}, too close to their resonance.",
+        statusCode: StatusCodes.Status422UnprocessableEntity);
+
     /// <summary>422: the glasses make no lens of the required kind.</summary>
     public static ProblemHttpResult NoSolution(NoThinSolution outcome) => TypedResults.Problem(
         title: "These glasses make no lens of the required kind.",

@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using GlassPair.Catalogue;
+using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Web.Stocks;
@@ -34,14 +35,16 @@ internal static class ShortlistEndpoint
             return Problems.Faulty(faults);
         }
 
-        if (stock is null || !stock.TryFindAll([.. json.Exclude ?? [], .. json.Include ?? []], out _, out problem))
+        if (stock is null || !stock.TryFindAll([.. json.Exclude ?? [], .. json.Include ?? []], out Glass[] named, out problem))
         {
             return problem!;
         }
 
+        int excluded = json.Exclude?.Length ?? 0;
+
         var request = new ShortlistRequest(
             requirement,
-            LimitsOf(json),
+            LimitsOf(json, named[..excluded], named[excluded..]),
             ChosenGlassesJson.QualityOf(json.AbbeTolerancePercent, json.IndexPrecision),
             json.RankBy ?? RankBy.ColorResidual,
             json.Take ?? UsualTake,
@@ -49,12 +52,12 @@ internal static class ShortlistEndpoint
         return TypedResults.Ok(new ShortlistJson(await shortlists.RankAsync(stock, request, cancellation)));
     }
 
-    private static GlassLimits LimitsOf(ShortlistRequestJson json) => new()
+    private static GlassLimits LimitsOf(ShortlistRequestJson json, Glass[] exclude, Glass[] include) => new()
     {
         Makers = json.Makers?.ToImmutableSortedSet(StringComparer.OrdinalIgnoreCase),
         Supply = json.Supply?.ToImmutableSortedSet(),
-        Exclude = (json.Exclude ?? []).ToImmutableSortedSet(StringComparer.OrdinalIgnoreCase),
-        Include = (json.Include ?? []).ToImmutableSortedSet(StringComparer.OrdinalIgnoreCase),
+        Exclude = exclude.Select(g => g.Id).ToImmutableSortedSet(StringComparer.OrdinalIgnoreCase),
+        Include = include.Select(g => g.Id).ToImmutableSortedSet(StringComparer.OrdinalIgnoreCase),
         ExpansionDifference = json.MaxExpansionDifferencePerK,
         AllowLead = json.AllowLead ?? true,
         AllowMolding = json.AllowMolding ?? true,

@@ -30,6 +30,7 @@ public static class Startup
         IOException { InnerException: AddressInUseException or SocketException } =>
             $"GlassPair cannot start: {problem.Message} Stop the other program, or choose another address with --urls http://localhost:5081",
         OptionsValidationException => $"GlassPair cannot start: its settings are wrong. {problem.Message}",
+        InvalidDataException => $"GlassPair cannot start: {problem.Message}",
         _ => null,
     };
 

@@ -178,6 +178,7 @@ public sealed class BadRequestTests(WebApplicationFactory<Program> factory) : Ap
     [InlineData("glasses/schott/N-BK7/index?nm=0x1F4", "nm[0]", "from 100 to 20000")]
     [InlineData("glasses/schott/N-BK7/index?nm=0.5876", "nm[0]", "from 100 to 20000")]
     [InlineData("glasses/schott/N-BK7/index?nm=500,,600", "nm[1]", "from 100 to 20000")]
+    [InlineData("glasses/schott/N-BK7/index?nm=500&temperatureC=141", "temperatureC", "from -100 to 140")]
     [InlineData("stocks?all=1", "all", "Unknown parameter")]
     public async Task Get_BadParameter_IsNamedWithWhatIsAllowed(string path, string parameter, string said)
     {

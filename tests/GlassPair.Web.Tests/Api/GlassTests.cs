@@ -136,6 +136,32 @@ public sealed class GlassTests(WebApplicationFactory<Program> factory) : ApiTest
         Assert.Contains("schott/N-BK7 has no index at 299.9 nm", problem.GetProperty("detail").GetString(), StringComparison.Ordinal);
     }
 
+    /// <summary>The maker's table of N-BK7, mean change from +20 °C to +40 °C per kelvin (pmoptics.com/Glass_Temperature_Coefficient.html): one decimal of 1e-6.</summary>
+    [Theory]
+    [InlineData(1060.0, 1.1e-6, 2.4e-6)]
+    [InlineData(546.074, 1.6e-6, 3.0e-6)]
+    [InlineData(435.8343, 2.1e-6, 3.5e-6)]
+    public async Task Index_AtAnotherTemperature_ChangesAsTheMakerPrints(double nm, double absolute, double relative)
+    {
+        const double halfLastDigit = 0.05e-6;
+        string path = FormattableString.Invariant($"/api/v1/glasses/schott/N-BK7/index?nm={nm}&temperatureC=");
+        JsonElement middle = await Get(path + "30");
+        Assert.Equal(absolute, Numbers(middle.GetProperty("dnDtAbsolutePerK"))[0], halfLastDigit);
+        Assert.Equal(relative, Numbers(middle.GetProperty("dnDtRelativePerK"))[0], halfLastDigit);
+        double change = Numbers((await Get(path + "40")).GetProperty("index"))[0] - Numbers((await Get(path + "20")).GetProperty("index"))[0];
+        Assert.Equal(relative, change / 20.0, halfLastDigit);
+    }
+
+    [Fact]
+    public async Task Index_WithoutCoefficients_IsGivenAtTheReferenceTemperatureOnly()
+    {
+        JsonElement answer = await Get("/api/v1/glasses/cdgm/BAF4/index?nm=587.5618");
+        Assert.Equal(1.582712, Numbers(answer.GetProperty("index"))[0], 1e-5);
+        Assert.Equal(JsonValueKind.Null, answer.GetProperty("dnDtAbsolutePerK")[0].ValueKind);
+        JsonElement problem = await Get("/api/v1/glasses/cdgm/BAF4/index?nm=587.5618&temperatureC=40", HttpStatusCode.UnprocessableEntity);
+        Assert.Contains("cdgm/BAF4", problem.GetProperty("detail").GetString(), StringComparison.Ordinal);
+    }
+
     [Fact]
     public async Task Stock_Unknown_IsNotFound()
     {
