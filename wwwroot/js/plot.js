@@ -92,8 +92,20 @@ function queue(chart, step) {
 
 async function draw(chart) {
   await Plotly.react(chart.plot, chart.traces.map(trace => traceOf(chart, trace)), layoutOf(chart), config);
+  useLocalClips(chart.plot);
   await drawShapes(chart); // labels are placed by the axes just drawn
   await fit(chart); // the page may have moved since the chart was made
+}
+
+/**
+ * On a page with a base address plotly refers to its clip paths by the whole address, which ends to hold as soon as the page
+ * changes its query: what was clipped then sticks out. A reference by name alone holds always.
+ */
+function useLocalClips(plot) {
+  plot._context._baseUrl = '';
+  for (const clipped of plot.querySelectorAll('[clip-path*="#"]')) {
+    clipped.setAttribute('clip-path', clipped.getAttribute('clip-path').replace(/^url\(['"]?[^#]*(#[^'")]*)['"]?\)$/, "url('$1')"));
+  }
 }
 
 const drawShapes = chart => Plotly.relayout(chart.plot, { shapes: shapesOf(chart) });
