@@ -57,6 +57,16 @@ public sealed class CatalogueFile
         return FromBytes(name, bytes.GetBuffer().AsSpan(0, (int)bytes.Length));
     }
 
+    /// <summary>Reads a small table that is no catalogue as text, from its first line on; null where it is no text, with the reason.</summary>
+    /// <param name="problem">Why it cannot be read, as a sentence; null where it was.</param>
+    public string? TryReadText(out string? problem)
+    {
+        var issues = new IssueList();
+        CsvText? text = CsvText.TryOpen(this, issues);
+        problem = text is null ? issues.Listed[0].Message : null;
+        return text is null ? null : (text.StatedSeparator is { } separator ? $"sep={separator}\n" : "") + Encoding.UTF8.GetString(text.Bytes);
+    }
+
     // A name comes from outside: it is shown in messages and names an entry of an archive, and nothing is ever opened by it.
     private static string CleanName(string name)
     {

@@ -38,4 +38,8 @@ public sealed record DispersionFit(
 
     /// <summary>Gets the measured index with the residual of largest size.</summary>
     public MeasuredIndex Worst => Measured[Residuals.IndexOf(WorstResidual)];
+
+    /// <summary>Gets how far a measured index lies from the fitted one; null outside <see cref="Range"/>, where the formula says nothing.</summary>
+    public double? ResidualOf(MeasuredIndex measured) =>
+        Range.Contains(measured.Wavelength) ? measured.Index - Math.Sqrt(Formula.IndexSquaredAt(measured.Wavelength.Micrometers)) : null;
 }

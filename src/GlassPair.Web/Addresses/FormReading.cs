@@ -98,17 +98,9 @@ public sealed class FormReading
                 _problems[field] = $"A value is needed. Allowed: {field.AllowedRange}.";
             }
         }
-        else if (field.IsWavelength && WavelengthText.FindLine(text) is { } line)
+        else if (field.FindProblem(text, out double value) is { } problem)
         {
-            _numbers[field] = line.Wavelength.Nanometers;
-        }
-        else if (!TypedNumber.TryRead(text, out double value, out string? problem))
-        {
-            _problems[field] = $"{problem} Allowed: {field.AllowedRange}.";
-        }
-        else if (!(value >= field.Min && value <= field.Max))
-        {
-            _problems[field] = Text($"{TypedNumber.Shorten(text.Trim())} is too {(value > field.Max ? "large" : "small")}. Allowed: {field.AllowedRange}.");
+            _problems[field] = problem;
         }
         else if (field == NumberField.Samples && value != Math.Floor(value))
         {

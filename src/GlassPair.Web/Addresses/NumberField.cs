@@ -103,10 +103,26 @@ public sealed record NumberField(string Key, string Label, string Unit, double M
     public bool IsOptional => this == ElementPower || this == FromCelsius || this == ToCelsius || this == ExpansionDifference;
 
     /// <summary>Gets whether the field takes a wavelength, as a number or as a line.</summary>
-    public bool IsWavelength => this == ShortEnd || this == Design || this == LongEnd;
+    public bool IsWavelength => Unit == "nm";
 
     /// <summary>Gets the allowed range in words.</summary>
     public string AllowedRange => IsWavelength
         ? FormattableString.Invariant($"{Min:#,0.####} to {Max:#,0.####} nm, or a line such as {Default}")
         : FormattableString.Invariant($"{Min:#,0.####} to {Max:#,0.####}{(Unit is "f/#" or "equal" ? "" : $" {Unit.TrimStart('±', ' ')}")}");
+
+    /// <summary>Reads what was typed, wavelengths in nm; the problem as a sentence that says what is allowed where it cannot be used.</summary>
+    /// <param name="text">The text, not blank.</param>
+    /// <param name="value">The number; 0 where there is none.</param>
+    public string? FindProblem(string text, out double value)
+    {
+        if (IsWavelength && WavelengthText.FindLine(text) is { } line)
+        {
+            value = line.Wavelength.Nanometers;
+            return null;
+        }
+
+        return !TypedNumber.TryRead(text, out value, out string? problem) ? $"{problem} Allowed: {AllowedRange}."
+            : !(value >= Min && value <= Max) ? $"{TypedNumber.Shorten(text.Trim())} is too {(value > Max ? "large" : "small")}. Allowed: {AllowedRange}."
+            : null;
+    }
 }

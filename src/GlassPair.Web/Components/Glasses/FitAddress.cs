@@ -82,7 +82,18 @@ public static class FitAddress
         }
     }
 
-    private static string Write(FitState state, string table) => new QueryWriter()
+    /// <summary>Writes the table that a fit was made from, lines left out among them, as one would type it.</summary>
+    public static string TextOf(DispersionFit fit) => string.Join('\n', fit.Measured.Concat(fit.LeftOut.Select(l => l.Measured))
+        .OrderBy(m => m.Wavelength)
+        .Select(m => $"{TypedNumber.Write(m.Wavelength.Nanometers)} {TypedNumber.Write(m.Index)}"));
+
+    private static string Write(FitState state, string table)
+    {
+        string query = QueryOf(state, table);
+        return query.Contains('&', StringComparison.Ordinal) ? query : "";
+    }
+
+    private static string QueryOf(FitState state, string table) => new QueryWriter()
         .Add("v", Format.ToString(CultureInfo.InvariantCulture))
         .Add("rows", table.ReplaceLineEndings("\n"))
         .Add("separator", WordOf(_separators, state.Table.Separator))

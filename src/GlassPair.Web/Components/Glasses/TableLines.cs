@@ -39,7 +39,7 @@ internal sealed class TableLines
 
         Data = [.. data];
         FieldSeparator parts = asked.Separator ?? declared ?? SeparatorOf(data.Select(l => l.Text));
-        Form = asked with { Separator = parts, Mark = asked.Mark ?? DecimalOf(data.Select(l => l.Text), parts) };
+        Form = asked with { Separator = parts, Mark = asked.Mark ?? MarkOf(data.Select(l => l.Text), parts) };
     }
 
     /// <summary>Gets the lines that should hold a pair of numbers, with their numbers from 1.</summary>
@@ -76,20 +76,16 @@ internal sealed class TableLines
             : Enum.GetValues<FieldSeparator>().FirstOrDefault(s => all.Any(l => NumberPair.TrySplit(l, s) is { Count: > 1 }), FieldSeparator.Space);
     }
 
-    /// <summary>A decimal comma where fields have commas and none has a point; a quoted comma in a table parted by commas decides nothing.</summary>
-    private static DecimalMark DecimalOf(IEnumerable<string> lines, FieldSeparator separator)
+    /// <summary>The mark that more numbers have; a comma in a table parted by commas decides nothing.</summary>
+    private static DecimalMark MarkOf(IEnumerable<string> lines, FieldSeparator separator)
     {
-        bool comma = false;
+        int points = 0, commas = 0;
         foreach (NumberPair.Field field in lines.SelectMany(l => NumberPair.TrySplit(l, separator) ?? []).Where(f => NumberPair.LooksLikeNumber(f.Text)))
         {
-            if (field.Text.Contains('.', StringComparison.Ordinal))
-            {
-                return DecimalMark.Point;
-            }
-
-            comma |= field.Text.Contains(',', StringComparison.Ordinal) && separator != FieldSeparator.Comma;
+            points += field.Text.Contains('.', StringComparison.Ordinal) ? 1 : 0;
+            commas += field.Text.Contains(',', StringComparison.Ordinal) ? 1 : 0;
         }
 
-        return comma ? DecimalMark.Comma : DecimalMark.Point;
+        return separator != FieldSeparator.Comma && commas > points ? DecimalMark.Comma : DecimalMark.Point;
     }
 }

@@ -1,0 +1,187 @@
+using System.Collections.Immutable;
+using System.Globalization;
+using GlassPair.Catalogue;
+using GlassPair.Optics.Glasses;
+using GlassPair.Web.Components.Glasses;
+using GlassPair.Web.Figures;
+using Microsoft.AspNetCore.Components;
+using Microsoft.AspNetCore.Components.Forms;
+using Microsoft.AspNetCore.Components.Routing;
+using Microsoft.AspNetCore.Components.Web;
+
+namespace GlassPair.Web.Components.Pages;
+
+/// <summary>Fits a dispersion formula to measured indices as they are typed: what was read, how well it fits, and what each line says.</summary>
+public sealed partial class FitPage : ComponentBase
+{
+    private const string Placeholder = "404.66  1.530240\n435.83  1.526690\n546.07  1.518720\n…";
+    private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(120);
+    private static readonly TimeSpan _addressPause = TimeSpan.FromMilliseconds(400);
+
+    private static readonly (WavelengthUnit?, string)[] _units =
+        [(null, "as found"), (WavelengthUnit.Nanometers, "nm"), (WavelengthUnit.Micrometers, "µm")];
+
+    private static readonly (FieldSeparator?, string)[] _separators =
+        [(null, "as found"), .. Enum.GetValues<FieldSeparator>().Select(s => ((FieldSeparator?)s, TableForm.NameOf(s)))];
+
+    private static readonly (DecimalMark?, string)[] _marks = [(null, "as found"), (DecimalMark.Point, "point"), (DecimalMark.Comma, "comma")];
+
+    private static readonly (DispersionForm?, string)[] _forms =
+        [(null, "the best"), (DispersionForm.Sellmeier, "Sellmeier"), (DispersionForm.PowerSeries, "power series")];
+
+    private FitState _state = FitState.Empty;
+    private FitAnswer _answer = FitAnswer.Of(FitState.Empty);
+    private ImmutableArray<string> _notices = [];
+    private string? _fileProblem;
+    private string _shownQuery = "";
+    private ErrorBoundary? _chartBoundary;
+    private CancellationTokenSource _typing = new();
+
+    [Inject] private NavigationManager Navigation { get; set; } = null!;
+
+    private string Title => (_answer.Glass is { } glass && _state.Name.Length > 0 ? $"Fit of {glass.Name}" : "Fit of measured indices") + " · GlassPair";
+
+    private string Link => Navigation.BaseUri + "fit" + FitAddress.Write(_state);
+
+    private IEnumerable<int> TermChoices => Enumerable.Range(1, _state.Form is { } form ? DispersionFitter.MaxTerms(form) : 0);
+
+    private string CatalogueRow => _answer.CatalogueText().Split('\n') is [_, var row, ..] ? row : "";
+
+    private string LeftOutSentence => _answer.LeftOutCount == 0 ? ""
+        : $"{Counted(_answer.LeftOutCount, "line")} left out by you" + (_answer.WithAll is { } all ? $"; with all of them the RMS is {FigureText.PowerOfTen(all.RmsResidual, 1)}." : ".");
+
+    /// <inheritdoc/>
+    public void Dispose()
+    {
+        Navigation.LocationChanged -= OnLocationChanged;
+        _typing.Cancel();
+        _typing.Dispose();
+    }
+
+    /// <inheritdoc/>
+    protected override void OnInitialized()
+    {
+        Navigation.LocationChanged += OnLocationChanged;
+        ReadAddress();
+    }
+
+    private static string Counted(int count, string noun) => count == 1 ? $"1 {noun}" : $"{FigureText.Count(count)} {noun}s";
+
+    private static string Number(double? value, int decimals) => value is { } v ? FigureText.Fixed(v, decimals) : GlassColumn.Unknown;
+
+    private static string Cut(string? text, int length) => text is null ? "" : text.Length <= length ? text : text[..length];
+
+    private static T? Chosen<T>((T? Value, string Text)[] options, ChangeEventArgs e)
+        where T : struct, Enum => options.FirstOrDefault(o => o.Value?.ToString() == e.Value as string).Value;
+
+    private bool IsWorst(FitLine line) => line.IsUsed && _answer.Made is { } fit && line.Row.Measured is { } measured && measured.Wavelength == fit.Worst.Wavelength;
+
+    private string RemarkOn(FitLine line) =>
+        line.IsUsed ? IsWorst(line) ? "worst line" : ""
+        : _answer.Made is not null && line.Residual is null ? "left out by you; outside the range fitted, where the formula says nothing"
+        : "left out by you";
+
+    private void ReadAddress()
+    {
+        _shownQuery = new Uri(Navigation.Uri).Query;
+        (_state, _notices) = FitAddress.Read(_shownQuery);
+        Answer();
+    }
+
+    private void Answer()
+    {
+        _answer = FitAnswer.Of(_state);
+        _chartBoundary?.Recover();
+    }
+
+    private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(() =>
+    {
+        if (new Uri(e.Location) is { AbsolutePath: var path, Query: var query } && query != _shownQuery && path == new Uri(new Uri(Navigation.BaseUri), "fit").AbsolutePath)
+        {
+            ReadAddress();
+            StateHasChanged();
+        }
+    });
+
+    /// <summary>The field follows at once, the fit after a pause in which the next letter may come, the address after a longer one.</summary>
+    private async Task TypeAsync(FitState next)
+    {
+        (_state, _fileProblem) = (next, null);
+        CancellationToken cancellation = await RestartAsync();
+        if (await PauseAsync(_pause, cancellation))
+        {
+            Answer();
+            StateHasChanged();
+        }
+
+        if (await PauseAsync(_addressPause, cancellation))
+        {
+            Navigate(replace: true);
+        }
+    }
+
+    private async Task PickAsync(FitState next)
+    {
+        (_state, _fileProblem) = (next, null);
+        await RestartAsync();
+        Answer();
+        Navigate(replace: false);
+    }
+
+    private Task TermsAsync(ChangeEventArgs e) =>
+        PickAsync(_state with
+        {
+            Terms = int.TryParse(e.Value as string, NumberStyles.None, CultureInfo.InvariantCulture, out int terms) && TermChoices.Contains(terms) ? terms : null,
+        });
+
+    private async Task OpenAsync(InputFileChangeEventArgs e)
+    {
+        if (e.File.Size > MeasuredTable.MaxLength)
+        {
+            _fileProblem = string.Create(CultureInfo.InvariantCulture, $"The file holds {e.File.Size:#,0} bytes; up to {MeasuredTable.MaxLength:#,0} are read. Send a longer table to the API at /api/v1/fit.");
+            return;
+        }
+
+        try
+        {
+            await using Stream stream = e.File.OpenReadStream(MeasuredTable.MaxLength);
+            CatalogueFile file = await CatalogueFile.FromStreamAsync(e.File.Name, stream, CancellationToken.None);
+            if (file.TryReadText(out string? problem) is { } text)
+            {
+                await PickAsync(_state with { Text = Cut(text, MeasuredTable.MaxLength), LeftOut = [] });
+            }
+            else
+            {
+                _fileProblem = $"{file.Name}: {problem}";
+            }
+        }
+        catch (IOException)
+        {
+            _fileProblem = "The file could not be read to its end: open it again.";
+        }
+    }
+
+    private async Task<CancellationToken> RestartAsync()
+    {
+        await _typing.CancelAsync();
+        _typing.Dispose();
+        _typing = new CancellationTokenSource();
+        return _typing.Token;
+    }
+
+    private static async Task<bool> PauseAsync(TimeSpan pause, CancellationToken cancellation)
+    {
+        await Task.Delay(pause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
+        return !cancellation.IsCancellationRequested;
+    }
+
+    private void Navigate(bool replace)
+    {
+        string query = FitAddress.Write(_state);
+        if (query != _shownQuery)
+        {
+            _shownQuery = query;
+            Navigation.NavigateTo("fit" + query, new NavigationOptions { ReplaceHistoryEntry = replace });
+        }
+    }
+}
