@@ -18,9 +18,9 @@ public sealed record DemoRequirement(string Title, WorkbenchState State)
     public static DemoRequirement Read(string path)
     {
         using FileStream file = File.OpenRead(path);
-        using JsonDocument document = JsonDocument.Parse(file);
         try
         {
+            using JsonDocument document = JsonDocument.Parse(file);
             RequirementJson requirement = document.RootElement.Deserialize<RequirementJson>(_json) ?? throw new InvalidDataException($"{path} is empty.");
             return new DemoRequirement(document.RootElement.GetProperty("title").GetString() ?? "", StateOf(requirement));
         }

@@ -1,5 +1,4 @@
 using System.Collections.Immutable;
-using GlassPair.Optics.Color;
 using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;

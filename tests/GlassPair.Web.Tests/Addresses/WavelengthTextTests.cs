@@ -1,4 +1,3 @@
-using System.Globalization;
 using GlassPair.Optics.Spectrum;
 using GlassPair.Web.Addresses;
 
@@ -6,18 +5,6 @@ namespace GlassPair.Web.Tests.Addresses;
 
 public sealed class WavelengthTextTests
 {
-    /// <summary>The lines that have a letter in <c>data/spectral-lines.csv</c>, whose source stands beside each.</summary>
-    private static IEnumerable<(string Symbol, double Nanometers)> Published =>
-        File.ReadLines(Path.Combine(AppContext.BaseDirectory, "data", "spectral-lines.csv"))
-            .Where(l => l.Length > 0 && l[0] != '#').Skip(1)
-            .Select(l => l.Split(','))
-            .Where(c => !char.IsDigit(c[0][0]))
-            .Select(c => (c[0], double.Parse(c[1], CultureInfo.InvariantCulture)));
-
-    [Fact]
-    public void Lines_AreThoseOfTheTable() =>
-        Assert.Equal(Published, WavelengthText.Lines.Select(l => (l.Symbol, l.Wavelength.Nanometers)));
-
     [Theory]
     [InlineData("F'", 479.9914)]
     [InlineData("F′", 479.9914)]

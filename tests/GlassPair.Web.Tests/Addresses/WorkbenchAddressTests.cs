@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using CsCheck;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
@@ -15,18 +14,18 @@ public sealed class WorkbenchAddressTests
         Gen.String[0, NumberField.MaxLength],
         Gen.String[Gen.Char["0123456789.,-+e&=%#?/'\" ±−"], 0, NumberField.MaxLength]).Where(t => !t.Any(char.IsSurrogate));
 
-    private static readonly Gen<string> _glass = Gen.OneOfConst("schott/N-BK7", "hoya/FCD10A", "sumita/K-CaFK95(M)", "own shop/glass, special 100%", "ohara/S-FPL53");
+    private static readonly Gen<string> _glass = Gen.OneOf("schott/N-BK7", "hoya/FCD10A", "sumita/K-CaFK95(M)", "own shop/glass, special 100%", "ohara/S-FPL53");
 
     private static readonly Gen<WorkbenchState> _state =
-        from texts in Gen.Select(Gen.OneOfConst([.. NumberField.All]), _anyText).List[0, 8]
+        from texts in Gen.Select(Gen.OneOf([.. NumberField.All]), _anyText).List[0, 8]
         from switches in Gen.Bool.Array[5]
-        from makers in Gen.OneOfConst("hoya", "ohara", "schott").List[0, 3]
+        from makers in Gen.OneOf("hoya", "ohara", "schott").List[0, 3]
         from supply in Gen.Enum<Supply>().List[0, 5]
         from glasses in _glass.List[0, 4]
         from rankBy in Gen.Enum<RankBy>()
         from each in Gen.Int[1, ShortlistRequest.MaxTake].Nullable()
         from take in Gen.Int[1, ShortlistRequest.MaxTake]
-        from columns in Gen.OneOfConst([.. RankingColumn.All.Select(c => c.Key)]).List[0, 6]
+        from columns in Gen.OneOf([.. RankingColumn.All.Select(c => c.Key)]).List[0, 6]
         from filter in Gen.String[0, WorkbenchState.MaxFilterLength].Where(t => !t.Any(char.IsSurrogate))
         select texts.Aggregate(WorkbenchState.Empty, (state, text) => state.With(text.Item1, text.Item2)) with
         {
@@ -85,7 +84,7 @@ public sealed class WorkbenchAddressTests
 
     [Fact]
     public void Read_AnyValueOfAnyKey_NeverThrowsAndSettles() =>
-        Gen.Select(Gen.OneOfConst("f", "makers", "supply", "include", "rank", "each", "take", "sort", "columns", "pair", "pin", "map", "stock", "v"), Gen.String).Sample((key, value) =>
+        Gen.Select(Gen.OneOf("f", "makers", "supply", "include", "rank", "each", "take", "sort", "columns", "pair", "pin", "map", "stock", "v"), Gen.String).Sample((key, value) =>
         {
             string query = WorkbenchAddress.Write(WorkbenchAddress.Read($"?{key}={Uri.EscapeDataString(value)}").State);
             Assert.Equal(query, WorkbenchAddress.Write(WorkbenchAddress.Read(query).State));

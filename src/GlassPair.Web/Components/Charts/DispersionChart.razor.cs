@@ -2,7 +2,6 @@ using System.Collections.Immutable;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Spectrum;
 using Microsoft.AspNetCore.Components;
-using GlassPair.Web.Addresses;
 using GlassPair.Web.Figures;
 
 namespace GlassPair.Web.Components.Charts;
@@ -28,7 +27,7 @@ public sealed partial class DispersionChart : ComponentBase
         }
 
         _shown = Glass;
-        _lines = [.. WavelengthText.Lines.Where(l => Glass.Range.Contains(l.Wavelength))];
+        _lines = [.. SpectralLine.All.Where(l => Glass.Range.Contains(l.Wavelength))];
         (double from, double to) = (Glass.Range.Shortest.Nanometers, Glass.Range.Longest.Nanometers);
 
         // Steps that grow with the wavelength: the index bends most at the short end.
