@@ -157,6 +157,7 @@ public sealed partial class Workbench : ComponentBase
         if (new Uri(e.Location) is { AbsolutePath: var path, Query: var query } && query != _shownQuery && path == new Uri(Navigation.BaseUri).AbsolutePath)
         {
             ReadAddress();
+            StateHasChanged();
             await AnswerAsync(TimeSpan.Zero);
         }
     });
@@ -261,6 +262,7 @@ public sealed partial class Workbench : ComponentBase
     {
         (_answer, _stale, _failure) = (answer, false, null);
         Choose();
+        StateHasChanged();
     }
 
     /// <summary>Where no pair holds, counts what each limit costs, one after the other.</summary>
