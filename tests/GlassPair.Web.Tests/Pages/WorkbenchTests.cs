@@ -64,12 +64,12 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void Typing_ShowsTheNewAnswerAndReplacesTheAddress()
+    public async Task Typing_ShowsTheNewAnswerAndReplacesTheAddress()
     {
         var page = Open(Small);
         int before = Navigation.History.Count;
 
-        page.Find("#field-f").Input("500");
+        await page.InvokeAsync(() => page.Find("#field-f").Input("500"));
 
         page.WaitForAssertion(() => Assert.StartsWith("500 mm f/6", Title(page), StringComparison.Ordinal));
         page.WaitForAssertion(() => Assert.Contains("f=500", Query, StringComparison.Ordinal));
@@ -78,12 +78,12 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void Typing_Nonsense_KeepsTheLastAnswerAndTheText()
+    public async Task Typing_Nonsense_KeepsTheLastAnswerAndTheText()
     {
         var page = Open(Small);
         string first = page.Find(".rank tbody button").TextContent;
 
-        page.Find("#field-f").Input("24o");
+        await page.InvokeAsync(() => page.Find("#field-f").Input("24o"));
 
         page.WaitForAssertion(() => Assert.Contains("f=24o", Query, StringComparison.Ordinal));
         Assert.Equal("24o", page.Find("#field-f").GetAttribute("value"));
@@ -93,13 +93,13 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void Choosing_PushesTheAddressSoThatBackWorks()
+    public async Task Choosing_PushesTheAddressSoThatBackWorks()
     {
         var page = Open(Small);
         string first = page.Find("[aria-current=true] button").GetAttribute("aria-label")!;
         string before = Navigation.Uri;
 
-        page.FindAll(".rank tbody button")[2].Click();
+        await page.InvokeAsync(() => page.FindAll(".rank tbody button")[2].Click());
 
         page.WaitForAssertion(() => Assert.NotEqual(first, page.Find("[aria-current=true] button").GetAttribute("aria-label")));
         Assert.Contains("pair=hoya/", Query, StringComparison.Ordinal);
@@ -110,14 +110,14 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void Address_OpenedAnew_ShowsTheSame()
+    public async Task Address_OpenedAnew_ShowsTheSame()
     {
         var page = Open(Small);
-        page.FindAll(".rank tbody button")[2].Click();
+        await page.InvokeAsync(() => page.FindAll(".rank tbody button")[2].Click());
         page.WaitForAssertion(() => Assert.Contains("pair=", Query, StringComparison.Ordinal));
-        page.FindAll(".rank tbody button")[1].KeyDown("p");
+        await page.InvokeAsync(() => page.FindAll(".rank tbody button")[1].KeyDown("p"));
         page.WaitForAssertion(() => Assert.Contains("pin=", Query, StringComparison.Ordinal));
-        page.FindAll(".rank thead button").Single(b => b.TextContent.Contains("Holds", StringComparison.Ordinal)).Click();
+        await page.InvokeAsync(() => page.FindAll(".rank thead button").Single(b => b.TextContent.Contains("Holds", StringComparison.Ordinal)).Click());
         page.WaitForAssertion(() => Assert.Contains("sort=holds", Query, StringComparison.Ordinal));
 
         var again = Open(Query);
@@ -128,15 +128,15 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void Pin_StaysOnTopUntilUnpinned()
+    public async Task Pin_StaysOnTopUntilUnpinned()
     {
         var page = Open(Small);
         string name = page.FindAll(".rank tbody button")[1].TextContent;
 
-        page.FindAll(".rank tbody button")[1].KeyDown("p");
+        await page.InvokeAsync(() => page.FindAll(".rank tbody button")[1].KeyDown("p"));
         page.WaitForAssertion(() => Assert.Equal(name, page.Find(".rank tr.pinned button").TextContent));
 
-        page.Find(".rank tr.pinned button").KeyDown("p");
+        await page.InvokeAsync(() => page.Find(".rank tr.pinned button").KeyDown("p"));
         page.WaitForAssertion(() => Assert.Empty(page.FindAll(".rank tr.pinned")));
         Assert.DoesNotContain("pin=", Query, StringComparison.Ordinal);
     }
@@ -186,26 +186,25 @@ public sealed class WorkbenchTests : BunitContext
     }
 
     [Fact]
-    public void NoPairHolds_TellsWhatHelpsAndApplies()
+    public async Task NoPairHolds_TellsWhatHelpsAndApplies()
     {
         var page = Open("?v=1&f=240&n=1&makers=hoya&take=50");
         page.WaitForAssertion(() => Assert.Contains(page.FindAll(".no-pair tr button"), b => !b.HasAttribute("disabled")), TimeSpan.FromSeconds(20));
-        var row = page.FindAll(".no-pair tbody tr").First(r => r.TextContent.Contains("Stop down to", StringComparison.Ordinal));
 
-        row.QuerySelector("button")!.Click();
+        await page.InvokeAsync(() => page.FindAll(".no-pair tbody tr").First(r => r.TextContent.Contains("Stop down to", StringComparison.Ordinal)).QuerySelector("button")!.Click());
 
         page.WaitForAssertion(() => Assert.DoesNotContain("n=1&", Query, StringComparison.Ordinal));
         page.WaitForAssertion(() => Assert.Empty(page.FindAll(".no-pair")));
     }
 
     [Fact]
-    public void ManyClicks_BeforeARender_LeaveThePageWhole()
+    public async Task ManyClicks_BeforeARender_LeaveThePageWhole()
     {
         var page = Open(Small);
 
         for (int i = 0; i < 100; i++)
         {
-            page.FindAll(".rank tbody button")[i % 5].Click();
+            await page.InvokeAsync(() => page.FindAll(".rank tbody button")[i % 5].Click());
         }
 
         page.WaitForAssertion(() => Assert.Single(page.FindAll("tr[aria-current=true]")));

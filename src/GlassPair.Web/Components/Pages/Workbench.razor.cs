@@ -150,7 +150,11 @@ public sealed partial class Workbench : ComponentBase
 
     private void OnStockChanged() => _ = InvokeAsync(StateHasChanged);
 
-    private void OnReturned(object? sender, EventArgs e) => _ = InvokeAsync(() => AnswerAsync(TimeSpan.Zero));
+    private void OnReturned(object? sender, EventArgs e) => _ = InvokeAsync(async () =>
+    {
+        await AnswerAsync(TimeSpan.Zero);
+        StateHasChanged();
+    });
 
     private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(async () =>
     {
@@ -159,6 +163,7 @@ public sealed partial class Workbench : ComponentBase
             ReadAddress();
             StateHasChanged();
             await AnswerAsync(TimeSpan.Zero);
+            StateHasChanged();
         }
     });
 
@@ -262,19 +267,19 @@ public sealed partial class Workbench : ComponentBase
     {
         (_answer, _stale, _failure) = (answer, false, null);
         Choose();
-        StateHasChanged();
     }
 
     /// <summary>Where no pair holds, counts what each limit costs, one after the other.</summary>
     private async Task CountCostsAsync(WorkbenchAnswer answer, CancellationToken cancellation)
     {
-        _relaxations = answer.Shortlist.CombinationsHolding == 0 ? WorkbenchRelaxation.Of(_state, answer) : [];
-        _costs = [.. _relaxations.Select(r => (r.Sentence, (long?)null))];
-        for (int i = 0; i < _relaxations.Length && RendererInfo.IsInteractive; i++)
+        ImmutableArray<WorkbenchRelaxation> relaxations = answer.Shortlist.CombinationsHolding == 0 ? WorkbenchRelaxation.Of(_state, answer) : [];
+        (_relaxations, _costs) = (relaxations, [.. relaxations.Select(r => (r.Sentence, (long?)null))]);
+        for (int i = 0; i < relaxations.Length && RendererInfo.IsInteractive; i++)
         {
             StateHasChanged();
-            long? holding = await Answers.CountHoldingAsync(_relaxations[i].State, answer.Stock, cancellation);
-            _costs = _costs.SetItem(i, (_relaxations[i].Sentence, holding));
+            long? holding = await Answers.CountHoldingAsync(relaxations[i].State, answer.Stock, cancellation);
+            cancellation.ThrowIfCancellationRequested();
+            _costs = _costs.SetItem(i, (relaxations[i].Sentence, holding));
         }
     }
 
