@@ -87,7 +87,7 @@ public static class GlassReport
     /// <summary>Gets the index at each named line in the range of the formula.</summary>
     public static ImmutableArray<LineFigure> Lines(Glass glass) =>
     [
-        .. WavelengthText.Lines.Where(l => glass.Range.Contains(l.Wavelength)).Select(l => new LineFigure(
+        .. SpectralLine.All.Where(l => glass.Range.Contains(l.Wavelength)).Select(l => new LineFigure(
             l, glass.IndexAt(l.Wavelength), glass.DispersionAt(l.Wavelength), IndexAtTemperature.TryOf(glass, l.Wavelength, Celsius))),
     ];
 
