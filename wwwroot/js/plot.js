@@ -240,7 +240,7 @@ function labelsOf(chart) {
   };
   const shapes = [];
   const put = (lines, candidates, color, isBold) => {
-    const w = Math.max(...lines.map((line, i) => measure(line, isBold && i === 0))) + 2;
+    const w = Math.max(...lines.map((line, i) => measure(line, isBold && i === 0))) * 1.03 + 2; // room for another rounding of glyphs
     const h = lines.length * size * leading;
     const best = candidates(w, h).map(({ x, y, cost = 0 }) => ({ x, y, w, h, cost }))
       .map(box => ({ ...box, cost: box.cost + costOf(box, bounds, obstacles) }))
@@ -337,7 +337,7 @@ function listenToPointer(chart) {
   const { plot } = chart;
   let down = null;
   plot.addEventListener('pointermove', e => { if (e.pointerType !== 'touch' && e.buttons === 0) point(chart, e); });
-  plot.addEventListener('pointerleave', () => point(chart, null));
+  plot.addEventListener('pointerleave', e => { if (e.pointerType !== 'touch') point(chart, null); });
   plot.addEventListener('pointerdown', e => { down = e.button === 0 ? [e.clientX, e.clientY] : null; }, true);
   // Plotly covers the page while the button is down, so the end of a click is heard at the window.
   const up = e => {

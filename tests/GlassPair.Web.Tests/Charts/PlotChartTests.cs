@@ -76,7 +76,7 @@ public sealed class PlotChartTests : ChartTestBase
         JSInterop.SetupModule(i => i.Identifier == "import" && i.Arguments[0]!.ToString()!.Contains("plotly-interop", StringComparison.Ordinal))
             .SetupVoid("importScript", _ => true).SetException(new JSException("Failed to load script"));
         IRenderedComponent<PlotChart> chart = RenderChart();
-        chart.WaitForAssertion(() => Assert.Contains("cannot be drawn", chart.Find(".plot-message[role=status]").TextContent, StringComparison.Ordinal));
+        chart.WaitForAssertion(() => Assert.Contains("cannot be drawn", Assert.Single(chart.FindAll(".plot-message")).TextContent, StringComparison.Ordinal));
     }
 
     [Fact]
