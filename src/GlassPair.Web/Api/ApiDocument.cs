@@ -2,6 +2,7 @@ using System.Globalization;
 using System.Reflection;
 using System.Text.Json;
 using System.Text.Json.Nodes;
+using System.Text.Json.Serialization.Metadata;
 using Microsoft.AspNetCore.OpenApi;
 using Microsoft.OpenApi;
 
@@ -65,9 +66,15 @@ internal static class ApiDocument
 
     private static void Describe(OpenApiSchema schema, OpenApiSchemaTransformerContext context)
     {
-        if (context.JsonPropertyInfo is { IsRequired: true })
+        if (context.JsonPropertyInfo is { IsRequired: true } or { IsGetNullable: false })
         {
             schema.Type &= ~JsonSchemaType.Null;
+        }
+
+        // An answer writes every field.
+        if (context.JsonPropertyInfo is null && context.JsonTypeInfo is { Kind: JsonTypeInfoKind.Object, Properties: { Count: > 0 } fields } && fields.All(f => f.Set is null))
+        {
+            schema.Required = fields.Select(f => f.Name).ToHashSet();
         }
 
         // That a field may be null stands where the field does, not among the words of the type that it shares with others.
@@ -94,7 +101,9 @@ internal static class ApiDocument
 
         if (field.Description?.StartsWith(Getter, StringComparison.Ordinal) == true)
         {
-            field.Description = char.ToUpperInvariant(field.Description[Getter.Length]) + field.Description[(Getter.Length + 1)..];
+            string rest = field.Description[Getter.Length..];
+            bool isWord = rest.Length > 1 && (char.IsLetter(rest[1]) || rest[1] == ' ');
+            field.Description = isWord ? char.ToUpperInvariant(rest[0]) + rest[1..] : rest;
         }
     }
 

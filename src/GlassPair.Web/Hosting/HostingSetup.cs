@@ -1,5 +1,6 @@
 using Microsoft.AspNetCore.Components.Server;
 using Microsoft.AspNetCore.Components.Server.Circuits;
+using Microsoft.AspNetCore.DataProtection;
 using Microsoft.AspNetCore.SignalR;
 using Microsoft.Extensions.DependencyInjection.Extensions;
 
@@ -24,7 +25,12 @@ public static class HostingSetup
         }
 
         builder.Services.AddWordsAtStart();
-        builder.Services.Configure<SiteOptions>(builder.Configuration.GetSection("GlassPair:Site"));
+        IDataProtectionBuilder keys = builder.Services.AddDataProtection().SetApplicationName("GlassPair");
+        if (SiteOf(builder.Configuration).KeysFolder is { Length: > 0 } folder)
+        {
+            keys.PersistKeysToFileSystem(new DirectoryInfo(folder));
+        }
+
         builder.Services.AddRequestLimits(builder.Configuration);
         builder.Services.AddAntiforgery(options =>
         {
@@ -59,7 +65,7 @@ public static class HostingSetup
             app.UseExceptionHandler("/error", createScopeForErrors: true);
         }
 
-        if (app.Configuration.GetSection("GlassPair:Site").Get<SiteOptions>() is { HttpsOnly: true })
+        if (SiteOf(app.Configuration).HttpsOnly)
         {
             app.UseHsts();
             app.UseHttpsRedirection();
@@ -68,4 +74,6 @@ public static class HostingSetup
         app.UseStatusCodePagesWithReExecute("/not-found", createScopeForStatusCodePages: true);
         return app;
     }
+
+    private static SiteOptions SiteOf(IConfiguration configuration) => configuration.GetSection("GlassPair:Site").Get<SiteOptions>() ?? new();
 }

@@ -5,4 +5,10 @@ public sealed class SiteOptions
 {
     /// <summary>Gets or sets whether plain HTTP is sent on to HTTPS, and browsers are told to stay there; needs an HTTPS address or a proxy that has one.</summary>
     public bool HttpsOnly { get; set; }
+
+    /// <summary>
+    /// Gets or sets the folder of the keys that protect what a page keeps in the browser, so that open pages outlive a restart; empty means
+    /// the user's folder for such keys, or the memory of the process where there is none.
+    /// </summary>
+    public string KeysFolder { get; set; } = "";
 }

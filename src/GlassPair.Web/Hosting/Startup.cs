@@ -20,7 +20,7 @@ public static class Startup
         var progress = new Progress();
         services.AddSingleton(progress);
         services.Configure<LoggerFilterOptions>(options => options.Rules.Add(new LoggerFilterRule(
-            providerName: null, "Microsoft.Extensions.Hosting.Internal.Host", logLevel: null, (_, _, _) => progress.HasStarted)));
+            providerName: null, "Microsoft.Extensions.Hosting.Internal.Host", LogLevel.Information, (_, _, _) => progress.HasStarted)));
         return services;
     }
 
