@@ -1,6 +1,8 @@
 // Draws the figures of PlotChart. Plotly.Blazor loads plotly.js and makes each chart; from there on this module
 // shows figures in it, keeps the user's zoom, follows the color scheme and reports what is pointed at.
 
+import { clamp, placeLabels, sides } from './plot-labels.js';
+
 const charts = new Map();
 
 /** Waits for the chart that Plotly.Blazor makes, then listens to it. Fails where the library cannot be loaded. */
@@ -9,7 +11,8 @@ export async function open(id, frameId, dotNet) {
   await made(plot);
   const chart = {
     plot, dotNet, frame: document.getElementById(frameId), tip: plot.closest('.plot-picture').querySelector('.plot-tip'),
-    colors: new Map(), traces: [], figure: null, serial: 0, zoomed: null, drawn: Promise.resolve(), pointed: { kind: 0, index: -1 }, reporting: false,
+    colors: new Map(), traces: [], figure: null, serial: 0, zoomed: null, due: null, drawn: Promise.resolve(),
+    pointed: { kind: 0, index: -1 }, reporting: false, open: new AbortController(),
   };
   charts.set(id, chart);
   plot.on('plotly_relayout', e => {
@@ -19,14 +22,15 @@ export async function open(id, frameId, dotNet) {
     }
   });
   plot.on('plotly_doubleclick', () => zoom(id, 0));
-  chart.resizing = new ResizeObserver(() => resize(chart));
-  chart.resizing.observe(plot);
+  const resizing = new ResizeObserver(() => { if (chart.figure) queue(chart, () => fit(chart)); });
+  resizing.observe(plot);
+  chart.open.signal.addEventListener('abort', () => resizing.disconnect());
   listenToPointer(chart);
   listenToKeys(chart, id);
 }
 
 export function close(id) {
-  charts.get(id)?.resizing.disconnect();
+  charts.get(id)?.open.abort();
   charts.delete(id);
 }
 
@@ -42,14 +46,24 @@ export async function show(id, change) {
   chart.figure = change.figure;
   chart.traces = change.traces.map((trace, i) => trace ?? chart.traces[i]);
   if (before?.view !== chart.figure.view) chart.zoomed = null;
-  await queue(chart, async () => {
-    if (!isSame) return draw(chart);
-    if (changed.length > 0) {
-      await Plotly.animate(chart.plot, { data: changed.map(i => traceOf(chart, chart.traces[i])), traces: changed },
-        { mode: 'immediate', frame: { redraw: false, duration: 0 }, transition: { duration: 0 } });
-    }
-    await drawShapes(chart);
-  });
+  chart.due ??= { whole: false, traces: new Set() };
+  chart.due.whole ||= !isSame;
+  changed.forEach(i => chart.due.traces.add(i));
+  await queue(chart, () => catchUp(chart));
+}
+
+/** Draws what has changed since the last drawing: the traces that did, then everything that hangs on no trace. */
+async function catchUp(chart) {
+  const { due } = chart;
+  chart.due = null;
+  if (!due) return; // drawn together with an earlier figure
+  if (due.whole) return draw(chart);
+  if (due.traces.size > 0) {
+    const traces = [...due.traces];
+    await Plotly.animate(chart.plot, { data: traces.map(i => traceOf(chart, chart.traces[i])), traces },
+      { mode: 'immediate', frame: { redraw: false, duration: 0 }, transition: { duration: 0 } });
+  }
+  await drawShapes(chart);
 }
 
 const same = (a, b) => JSON.stringify(a) === JSON.stringify(b);
@@ -84,7 +98,7 @@ function made(plot) {
   });
 }
 
-/** Runs drawing steps one after the other; a step that was overtaken by a newer one still leaves the newest figure. */
+/** Runs drawing steps one after the other. */
 function queue(chart, step) {
   chart.drawn = chart.drawn.catch(() => {}).then(() => charts.has(chart.plot.id) ? step() : undefined);
   return chart.drawn;
@@ -110,10 +124,6 @@ function useLocalClips(plot) {
 
 const drawShapes = chart => Plotly.relayout(chart.plot, { shapes: shapesOf(chart) });
 
-function resize(chart) {
-  if (chart.figure) queue(chart, () => fit(chart));
-}
-
 /** Makes the picture as large as its frame. */
 async function fit(chart) {
   const { clientWidth: width, clientHeight: height, _fullLayout: drawn } = chart.plot;
@@ -133,6 +143,17 @@ function repaint() {
 
 matchMedia('(prefers-color-scheme: dark)').addEventListener('change', repaint);
 new MutationObserver(repaint).observe(document.documentElement, { attributes: true, attributeFilter: ['data-scheme'] });
+
+// On paper everything is light.
+let schemeOnScreen;
+addEventListener('beforeprint', () => {
+  schemeOnScreen = document.documentElement.dataset.scheme;
+  document.documentElement.dataset.scheme = 'light';
+});
+addEventListener('afterprint', () => {
+  if (schemeOnScreen) document.documentElement.dataset.scheme = schemeOnScreen;
+  else delete document.documentElement.dataset.scheme;
+});
 
 /** The color of a custom property where the chart stands. */
 function paint(chart, token) {
@@ -175,7 +196,7 @@ function traceOf(chart, trace) {
 
 function layoutOf(chart) {
   const style = getComputedStyle(chart.frame);
-  const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
+  const size = sizeOf(style);
   const [ink, quiet, grid, line, pane] = ['--ink', '--ink-2', '--grid', '--line-strong', '--pane'].map(token => paint(chart, token));
   const ranges = chart.zoomed ?? [chart.figure.x, chart.figure.y].map(axis => [axis.from, axis.to]);
   const axis = (of, range, length) => ({
@@ -215,121 +236,41 @@ function shapesOf(chart) {
       type: 'circle', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: disk.x, yanchor: disk.y, x0: -disk.radius, x1: disk.radius, y0: -disk.radius, y1: disk.radius,
       fillcolor: paint(chart, disk.fill), line: { color: paint(chart, disk.color), width: disk.width },
     })),
-    ...labelsOf(chart),
+    ...labelShapes(chart),
   ];
 }
 
-// --- labels: each where it covers least
-
-const gap = 9;      // from an anchor to its label, pixels
-const leading = 1.3;
-
-function labelsOf(chart) {
-  const { xaxis, yaxis } = chart.plot._fullLayout;
-  const toPixel = (x, y) => [xaxis.d2p(x), yaxis.d2p(y)];
-  const bounds = { x: 2, y: 2, w: xaxis._length - 4, h: yaxis._length - 4 };
-  const style = getComputedStyle(chart.frame);
-  const size = parseFloat(style.getPropertyValue('--size-1')) || 11;
-  const measure = (text, isBold) => widthOf(text, `${isBold ? 700 : 400} ${size}px ${style.fontFamily}`);
+/** The labels of a figure as shapes: a box of the text's size, hung on the place where it covers least. */
+function labelShapes(chart) {
+  const { figure, traces, plot, frame } = chart;
+  const { xaxis, yaxis } = plot._fullLayout;
+  const style = getComputedStyle(frame);
+  const size = sizeOf(style);
+  const toPixel = ([x, y]) => [xaxis.d2p(x), yaxis.d2p(y)];
   const halo = paint(chart, '--pane');
-  const obstacles = {
-    boxes: chart.figure.disks.map(disk => { const [x, y] = toPixel(disk.x, disk.y); return { x: x - disk.radius, y: y - disk.radius, w: 2 * disk.radius, h: 2 * disk.radius }; }),
-    lines: chart.figure.paths.filter(path => path.fill === null)
-      .flatMap(path => path.lines.flatMap(line => sides(corners(line).map(c => toPixel(...c)))).map(ends => ({ ends, weight: path.repelsLabels ? 40 : 2 }))),
-    dots: chart.traces.filter(trace => trace.mark !== 'None').flatMap(trace => trace.x.map((x, i) => toPixel(x, trace.y[i]))).filter(p => isIn(p, bounds)),
-  };
-  const shapes = [];
-  const put = (lines, candidates, color, isBold) => {
-    const w = Math.max(...lines.map((line, i) => measure(line, isBold && i === 0))) * 1.03 + 2; // room for another rounding of glyphs
-    const h = lines.length * size * leading;
-    const best = candidates(w, h).map(({ x, y, cost = 0 }) => ({ x, y, w, h, cost }))
-      .map(box => ({ ...box, cost: box.cost + costOf(box, bounds, obstacles) }))
-      .reduce((least, box) => box.cost < least.cost ? box : least);
-    obstacles.boxes.push(best);
-    const [px, py] = [xaxis.p2d(best.x), yaxis.p2d(best.y)];
-    shapes.push({
-      type: 'rect', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: px, yanchor: py, x0: 0, x1: w, y0: 0, y1: -h, line: { width: 0 },
-      label: {
-        text: lines.map((line, i) => i === 0 && isBold ? `<b>${escape(line)}</b>` : escape(line)).join('<br>'), textposition: 'middle left', padding: 0,
-        font: { size, color, shadow: `0 0 2px ${halo}, 0 0 2px ${halo}, 0 0 3px ${halo}, 0 0 3px ${halo}` },
-      },
-    });
-  };
-
-  for (const guide of chart.figure.guides.filter(guide => guide.text)) {
-    const x = xaxis.d2p(guide.x);
-    if (x >= bounds.x && x <= bounds.w) put([guide.text], (w, h) => [{ x: x + 3, y: 2 }, { x: x - w - 3, y: 2 }, { x: x + 3, y: 4 + h, cost: 2 }, { x: x - w - 3, y: 4 + h, cost: 2 }], paint(chart, '--ink-2'), false);
-  }
-  for (const label of chart.figure.labels) {
-    const lines = [label.title, ...label.notes];
-    const color = paint(chart, label.color);
-    const from = toPixel(label.x, label.y);
-    if (label.toX === null) {
-      if (isIn(from, bounds)) put(lines, (w, h) => around(from, w, h), color, label.isBold);
-    } else {
-      const seen = clip(from, toPixel(label.toX, label.toY), bounds);
-      if (seen) put(lines, (w, h) => along(seen, w, h), color, label.isBold);
-    }
-  }
-  if (chart.figure.note.length > 0) {
-    const { x, y, w: width, h: height } = bounds;
-    put(chart.figure.note, (w, h) => [
-      { x: x + width - w - 4, y: y + height - h - 4 }, { x: x + width - w - 4, y: y + 2, cost: 8 }, { x: x + 4, y: y + height - h - 4, cost: 8 }, { x: x + 4, y: y + 2, cost: 8 },
-    ], paint(chart, '--ink-2'), false);
-  }
-  return shapes;
+  const placed = placeLabels({
+    width: xaxis._length, height: yaxis._length, size, font: style.fontFamily,
+    labels: figure.labels.map(label => ({
+      lines: [label.title, ...label.notes], color: label.color, isBold: label.isBold,
+      from: toPixel([label.x, label.y]), to: label.toX === null ? null : toPixel([label.toX, label.toY]),
+    })),
+    guides: figure.guides.filter(guide => guide.text).map(guide => ({ lines: [guide.text], color: '--ink-2', x: xaxis.d2p(guide.x) })),
+    note: figure.note.length > 0 ? { lines: figure.note, color: '--ink-2' } : null,
+    disks: figure.disks.map(disk => ({ at: toPixel([disk.x, disk.y]), radius: disk.radius })),
+    lines: figure.paths.filter(path => path.fill === null).map(path => ({ isMain: path.repelsLabels, lines: path.lines.map(line => corners(line).map(toPixel)) })),
+    dots: traces.filter(trace => trace.mark !== 'None').flatMap(trace => trace.x.map((x, i) => toPixel([x, trace.y[i]]))),
+  });
+  return placed.map(({ x, y, w, h, lines, color, isBold }) => ({
+    type: 'rect', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: xaxis.p2d(x), yanchor: yaxis.p2d(y), x0: 0, x1: w, y0: 0, y1: -h, line: { width: 0 },
+    label: {
+      text: lines.map((line, i) => i === 0 && isBold ? `<b>${escape(line)}</b>` : escape(line)).join('<br>'), textposition: 'middle left', padding: 0,
+      font: { size, color: paint(chart, color), shadow: `0 0 2px ${halo}, 0 0 2px ${halo}, 0 0 3px ${halo}, 0 0 3px ${halo}` },
+    },
+  }));
 }
 
-const around = ([x, y], w, h) => [1, 2.2, 4].flatMap((far, ring) => {
-  const d = gap * far;
-  return [[d, -h / 2], [-d - w, -h / 2], [-w / 2, -d - h], [-w / 2, d], [d * 0.7, d * 0.7], [d * 0.7, -d * 0.7 - h], [-d * 0.7 - w, d * 0.7], [-d * 0.7 - w, -d * 0.7 - h]]
-    .map(([dx, dy], turn) => ({ x: x + dx, y: y + dy, cost: ring * 6 + turn * 0.1 }));
-});
-
-const along = ([[x0, y0], [x1, y1]], w, h) => [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8].flatMap(at => {
-  const [x, y] = [x0 + at * (x1 - x0), y0 + at * (y1 - y0)];
-  return [1, 2, 4].flatMap(far => [{ x: x - w / 2, y: y + gap * far }, { x: x - w / 2, y: y - gap * far - h }].map(box => ({ ...box, cost: far * 1.5 + 4 * Math.abs(at - 0.5) })));
-});
-
-/** What a label would cover: the edge of the picture most, other labels nearly as much, then the lines it must not cross, then dots. */
-function costOf(box, bounds, { boxes, lines, dots }) {
-  const outside = box.w * box.h - overlap(box, bounds);
-  return outside * 10
-    + boxes.reduce((sum, other) => sum + overlap(box, other) * 4, 0)
-    + lines.reduce((sum, { ends, weight }) => sum + (clip(...ends, grown(box, 2)) ? weight : 0), 0)
-    + dots.reduce((sum, dot) => sum + (isIn(dot, box) ? 1.5 : 0), 0);
-}
-
-const sides = points => points.slice(1).map((point, i) => [points[i], point]);
-const grown = (box, by) => ({ x: box.x - by, y: box.y - by, w: box.w + 2 * by, h: box.h + 2 * by });
-const isIn = ([x, y], box) => x >= box.x && x <= box.x + box.w && y >= box.y && y <= box.y + box.h;
-const overlap = (a, b) => Math.max(0, Math.min(a.x + a.w, b.x + b.w) - Math.max(a.x, b.x)) * Math.max(0, Math.min(a.y + a.h, b.y + b.h) - Math.max(a.y, b.y));
-const clamp = (value, least, most) => Math.min(Math.max(value, least), most);
+const sizeOf = style => parseFloat(style.getPropertyValue('--size-1')) || 11;
 const escape = text => text.replace(/&/g, '&amp;').replace(/</g, '&lt;');
-
-/** The part of a segment inside a box, by the method of Liang and Barsky; null where none is. */
-function clip([x0, y0], [x1, y1], box) {
-  const [dx, dy] = [x1 - x0, y1 - y0];
-  let [from, to] = [0, 1];
-  for (const [p, q] of [[-dx, x0 - box.x], [dx, box.x + box.w - x0], [-dy, y0 - box.y], [dy, box.y + box.h - y0]]) {
-    if (p === 0 ? q < 0 : false) return null;
-    if (p < 0) from = Math.max(from, q / p);
-    if (p > 0) to = Math.min(to, q / p);
-  }
-  return from < to ? [[x0 + from * dx, y0 + from * dy], [x0 + to * dx, y0 + to * dy]] : null;
-}
-
-const canvas = document.createElement('canvas').getContext('2d');
-const widths = new Map();
-function widthOf(text, font) {
-  const key = font + text;
-  if (!widths.has(key)) {
-    if (widths.size > 2000) widths.clear();
-    canvas.font = font;
-    widths.set(key, canvas.measureText(text).width);
-  }
-  return widths.get(key);
-}
 
 // --- pointer
 
@@ -340,17 +281,14 @@ function listenToPointer(chart) {
   plot.addEventListener('pointerleave', e => { if (e.pointerType !== 'touch') point(chart, null); });
   plot.addEventListener('pointerdown', e => { down = e.button === 0 ? [e.clientX, e.clientY] : null; }, true);
   // Plotly covers the page while the button is down, so the end of a click is heard at the window.
-  const up = e => {
-    if (!plot.isConnected) return window.removeEventListener('pointerup', up, true);
-    if (!down) return;
-    const isClick = Math.hypot(e.clientX - down[0], e.clientY - down[1]) < 5;
+  window.addEventListener('pointerup', e => {
+    const isClick = down && Math.hypot(e.clientX - down[0], e.clientY - down[1]) < 5;
     down = null;
     if (!isClick) return;
     point(chart, e);
     const { kind, index } = chart.pointed;
     if (index >= 0) chart.dotNet.invokeMethodAsync('OnPick', chart.serial, kind, index);
-  };
-  window.addEventListener('pointerup', up, true);
+  }, { capture: true, signal: chart.open.signal });
   plot.addEventListener('wheel', e => {
     if (!(e.ctrlKey || e.metaKey) || chart.frame.tabIndex !== 0) return;
     e.preventDefault();

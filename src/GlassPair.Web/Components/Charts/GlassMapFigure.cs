@@ -68,7 +68,7 @@ internal sealed class GlassMapFigure
             View = string.Create(CultureInfo.InvariantCulture, $"{_axes} {band.ShortEnd} {band.Design} {band.LongEnd}"),
             Traces = [_all, _usable, _partners],
             Paths = [.. WedgePaths(wedge, whole), .. ChordPaths(map, drawn)],
-            Disks = [.. PairDisks(map.Pinned, isThick: false), .. PairDisks(map.Chosen, isThick: true)],
+            Disks = [.. PairDisks(map.Pinned, isThick: false), .. GlassDisk(map), .. PairDisks(map.Chosen, isThick: true)],
             Labels = [.. PairLabels(map.Chosen, requirement, isChosen: true), .. GlassLabel(map), .. PairLabels(map.Pinned, requirement, isChosen: false)],
             Note = wedge is null ? [] : [$"shaded: where partners of {wedge.Glass.Glass.Name}", "stay within the limits of focus and power"],
         };
@@ -190,14 +190,17 @@ internal sealed class GlassMapFigure
         }
     }
 
-    /// <summary>Names the glass whose partners are shown, where the chosen combination has not done so.</summary>
-    private IEnumerable<PlotLabel> GlassLabel(GlassMap map)
+    /// <summary>Marks the glass whose partners are shown, where the chosen combination does not do so.</summary>
+    private IEnumerable<PlotDisk> GlassDisk(GlassMap map) =>
+        IsGlassUnmarked(map, out (double X, double Y) place) ? [new PlotDisk(place.X, place.Y, 5.0, "--accent", "--pane")] : [];
+
+    private IEnumerable<PlotLabel> GlassLabel(GlassMap map) =>
+        IsGlassUnmarked(map, out (double X, double Y) place) ? [new PlotLabel(place.X, place.Y, Glass!.Glass.Name) { Color = "--accent", IsBold = true }] : [];
+
+    private bool IsGlassUnmarked(GlassMap map, out (double X, double Y) place)
     {
-        if (Glass is not null && map.Chosen?.Elements.Any(e => e.Glass.Id == Glass.Glass.Id) != true)
-        {
-            (double x, double y) = Place(Glass);
-            yield return new PlotLabel(x, y, Glass.Glass.Name) { Color = "--accent", IsBold = true };
-        }
+        place = Glass is null ? default : Place(Glass);
+        return Glass is not null && map.Chosen?.Elements.Any(e => e.Glass.Id == Glass.Glass.Id) != true;
     }
 
     private ImmutableArray<double> Line(ThinSolution solution) => [.. solution.Elements.SelectMany(e =>
