@@ -1,3 +1,4 @@
+using System.Collections.Concurrent;
 using Microsoft.AspNetCore.Hosting;
 using Microsoft.AspNetCore.Hosting.Server;
 using Microsoft.AspNetCore.Hosting.Server.Features;
@@ -14,6 +15,7 @@ public sealed class AppFixture : WebApplicationFactory<Program>, IAsyncLifetime
         ["/usr/bin/chromium", "/usr/bin/chromium-browser", "/usr/bin/google-chrome", "/usr/bin/microsoft-edge"];
 
     private readonly string _archive = Directory.CreateTempSubdirectory("glasspair-browser-tests").FullName;
+    private readonly ConcurrentDictionary<IPage, ConcurrentQueue<string>> _errors = new();
     private IPlaywright? _playwright;
 
     public AppFixture() => UseKestrel(k => k.Listen(System.Net.IPAddress.Loopback, 0));
@@ -53,10 +55,23 @@ public sealed class AppFixture : WebApplicationFactory<Program>, IAsyncLifetime
             HasTouch = width < 640,
         });
         IPage page = await context.NewPageAsync();
+        ConcurrentQueue<string> errors = _errors[page] = [];
+        page.PageError += (_, error) => errors.Enqueue(error);
+        page.Console += (_, message) =>
+        {
+            // A page that says 404 is itself such a message.
+            if (message.Type == "error" && !message.Text.Contains("status of 404", StringComparison.Ordinal))
+            {
+                errors.Enqueue(message.Text);
+            }
+        };
         await page.GotoAsync(BaseUrl + address);
         await page.WaitForSelectorAsync("[data-ready]", new() { State = WaitForSelectorState.Attached, Timeout = 60_000 });
         return page;
     }
+
+    /// <summary>Gets what the browser complained about: script errors, and what the content-security policy refused.</summary>
+    public IReadOnlyCollection<string> ErrorsOf(IPage page) => _errors[page];
 
     protected override void ConfigureWebHost(IWebHostBuilder builder)
     {
