@@ -69,6 +69,9 @@ public static class ApiSetup
             .ProducesProblem(StatusCodes.Status503ServiceUnavailable)
             .ProducesProblem(StatusCodes.Status504GatewayTimeout);
 
+        RouteGroupBuilder lenses = api.MapGroup("").WithTags("Lenses").ProducesProblem(StatusCodes.Status404NotFound);
+        Post(lenses, "trace", TraceEndpoint.Trace, Examples.Trace).ProducesProblem(StatusCodes.Status503ServiceUnavailable);
+
         app.MapOpenApi();
         app.MapScalarApiReference(SecurityHeaders.ReferencePage, (options, context) => options
             .WithTitle("GlassPair API")

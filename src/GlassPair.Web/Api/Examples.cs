@@ -19,4 +19,8 @@ internal static class Examples
     /// <summary>Five indices of a borosilicate crown.</summary>
     public const string Fit =
         """{ "form": "powerSeries", "terms": 3, "nm": [435.8343, 486.1327, 546.074, 587.5618, 656.2725], "index": [1.52668, 1.52238, 1.51872, 1.5168, 1.51432] }""";
+
+    /// <summary>Three rays through a cemented doublet.</summary>
+    public const string Trace =
+        """{ "surfaces": [{ "radiusMm": 187.5, "thicknessMm": 8, "glass": "schott/N-BK7" }, { "radiusMm": -141.2, "thicknessMm": 4, "glass": "schott/F2" }, { "radiusMm": -612.4 }], "nm": [587.5618, 486.1327, 656.2725], "apertureDiameterMm": 40, "fieldDeg": 0.5, "pupil": [[0, 0], [0, 1], [0.7, 0.7]] }""";
 }

@@ -62,6 +62,12 @@ public static class Problems
         detail: sentence,
         statusCode: StatusCodes.Status422UnprocessableEntity);
 
+    /// <summary>422: the surfaces make no lens that can be traced.</summary>
+    public static ProblemHttpResult NoLens(string sentence) => TypedResults.Problem(
+        title: "These surfaces make no lens that can be traced.",
+        detail: sentence,
+        statusCode: StatusCodes.Status422UnprocessableEntity);
+
     /// <summary>Gets the ends of a range, nm.</summary>
     internal static double[] RangeNm(WavelengthRange range) => [range.Shortest.Nanometers, range.Longest.Nanometers];
 
