@@ -11,7 +11,7 @@ public sealed class NewcomerTests(AppFixture app)
     public async Task FirstVisit_ShowsTheInventedExample_AndSaysSo()
     {
         IPage page = await app.OpenAsync("/");
-        await Expect(page.GetByText("invented example").First).ToBeVisibleAsync();
+        await Expect(page.GetByText("invented scenario").First).ToBeVisibleAsync();
         await Expect(Rows(page).First).ToBeVisibleAsync();
         await Expect(page.Locator(".map .js-plotly-plot").First).ToBeVisibleAsync();
     }
