@@ -2,6 +2,7 @@ using Microsoft.AspNetCore.Hosting;
 using Microsoft.AspNetCore.Hosting.Server;
 using Microsoft.AspNetCore.Hosting.Server.Features;
 using Microsoft.AspNetCore.Mvc.Testing;
+using Microsoft.AspNetCore.TestHost;
 using Microsoft.Extensions.DependencyInjection;
 
 namespace GlassPair.Web.Tests.Hosting;
@@ -29,9 +30,13 @@ public class SiteFactory : WebApplicationFactory<Program>
         return new HttpClient(new SocketsHttpHandler { AllowAutoRedirect = false, UseCookies = false }) { BaseAddress = new Uri(address) };
     }
 
+    /// <summary>Gets or sets what replaces services of the site.</summary>
+    internal Action<IServiceCollection> Replace { get; init; } = _ => { };
+
     protected override void ConfigureWebHost(IWebHostBuilder builder)
     {
         builder.UseEnvironment("Tests");
+        builder.ConfigureTestServices(Replace);
         foreach ((string name, string value) in _settings)
         {
             builder.UseSetting(name, value);
