@@ -27,6 +27,10 @@ public sealed record GlassLimits
     /// <summary>Gets the glasses, <c>maker/name</c>, of which each combination must hold at least one; they pass the maker and supply limits. Empty demands none.</summary>
     public ImmutableSortedSet<string> Include { get; init; } = ImmutableSortedSet.Create<string>(StringComparer.OrdinalIgnoreCase);
 
+    /// <summary>Gets the sign of the power that the glass of <see cref="Include"/> must take in a pair; null allows either.</summary>
+    /// <remarks>Of two glasses the one with the larger Abbe number counts as the positive one.</remarks>
+    public PowerSign? IncludeAs { get; init; }
+
     /// <summary>Gets the largest difference in linear expansion (−30 °C to +70 °C) between the glasses, per kelvin; null allows any.</summary>
     public double? ExpansionDifference { get; init; }
 

@@ -12,7 +12,8 @@ internal sealed class PairScreen
     private readonly PairColumns _glasses;
     private readonly ShortlistRequest _request;
     private readonly PairFigures _row;
-    private readonly double[] _included;
+    private readonly double[] _includedFront;
+    private readonly double[] _includedRear;
     private readonly double[] _keys;
     private readonly double _airSpace;
     private readonly double _depth;
@@ -26,10 +27,13 @@ internal sealed class PairScreen
     {
         (_glasses, _request, _row) = (glasses, request, new PairFigures(glasses));
         _keys = new double[Lanes512.Count];
-        _included = new double[_row.Rms.Length];
+        (_includedFront, _includedRear) = (new double[_row.Rms.Length], new double[_row.Rms.Length]);
         for (int j = 0; j < glasses.Count; j++)
         {
-            _included[j] = included is null || included.Contains(glasses.Glasses[j]) ? 1.0 : 0.0;
+            // The front glass, of larger Abbe number, is the positive one.
+            bool isNamed = included is null || included.Contains(glasses.Glasses[j]);
+            _includedFront[j] = isNamed && (included is null || request.Limits.IncludeAs is not PowerSign.Negative) ? 1.0 : 0.0;
+            _includedRear[j] = isNamed && (included is null || request.Limits.IncludeAs is not PowerSign.Positive) ? 1.0 : 0.0;
         }
 
         Requirement requirement = request.Requirement;
@@ -107,13 +111,13 @@ internal sealed class PairScreen
         T fNumber = T.All(_request.Requirement.FNumber);
         double focal = _request.Requirement.FocalLength;
         double? expansionLimit = _request.Limits.ExpansionDifference;
-        bool isIncluded = _included[front] > 0.0;
+        bool isIncluded = _includedFront[front] > 0.0;
         for (int rear = front + 1; rear < _glasses.Count; rear += T.Count)
         {
             uint open = uint.MaxValue >> (32 - Math.Min(T.Count, _glasses.Count - rear));
             if (!isIncluded)
             {
-                Drop(PairDropReason.NotIncluded, T.Bits(T.AreEqual(T.Load(_included, rear), zero)), ref open);
+                Drop(PairDropReason.NotIncluded, T.Bits(T.AreEqual(T.Load(_includedRear, rear), zero)), ref open);
             }
 
             if (expansionLimit is { } most)
@@ -172,7 +176,7 @@ internal sealed class PairScreen
 
     private PairDropReason? ReasonAgainst(int front, int rear)
     {
-        if (_included[front] == 0.0 && _included[rear] == 0.0)
+        if (_includedFront[front] == 0.0 && _includedRear[rear] == 0.0)
         {
             return PairDropReason.NotIncluded;
         }

@@ -172,6 +172,7 @@ public sealed class FormReading
             AllowLead = state.AllowLead,
             AllowMolding = state.AllowMolding,
             Include = Canonical(state.Include, stock),
+            IncludeAs = state.IncludeAs,
             Exclude = Canonical(state.Exclude, stock),
             ExpansionDifference = Number(NumberField.ExpansionDifference) * 1e-6,
         };

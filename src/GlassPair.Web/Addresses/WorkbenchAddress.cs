@@ -29,7 +29,7 @@ public static class WorkbenchAddress
 
     private static readonly ImmutableArray<string> _known =
     [
-        "v", .. NumberField.All.Select(f => f.Key), "balance", "space", "makers", "supply", "lead", "molding", "include", "exclude",
+        "v", .. NumberField.All.Select(f => f.Key), "balance", "space", "makers", "supply", "lead", "molding", "include", "as", "exclude",
         "rank", "each", "take", "sort", "columns", "filter", "pair", "pin", "glass", "map", "stock",
     ];
 
@@ -62,6 +62,7 @@ public static class WorkbenchAddress
             .Add("lead", state.AllowLead ? null : "no")
             .Add("molding", state.AllowMolding ? null : "no")
             .AddList("include", state.Include.IsEmpty ? null : state.Include)
+            .Add("as", state.IncludeAs switch { PowerSign.Positive => "positive", PowerSign.Negative => "negative", _ => null })
             .AddList("exclude", state.Exclude.IsEmpty ? null : state.Exclude)
             .Add("rank", _rankWords.First(w => w.Value == state.RankBy).Word, "expected")
             .Add("each", state.PairsPerGlass is { } each ? Whole(each) : Any, Whole(WorkbenchState.DefaultPairsPerGlass))
@@ -100,6 +101,7 @@ public static class WorkbenchAddress
                 AllowLead = reader.Word("lead", true, ("yes", true), ("no", false)),
                 AllowMolding = reader.Word("molding", true, ("yes", true), ("no", false)),
                 Include = WorkbenchState.NoGlasses.Union(reader.List("include", WorkbenchState.MaxNamedGlasses) ?? []),
+                IncludeAs = reader.Word<PowerSign?>("as", null, ("positive", PowerSign.Positive), ("negative", PowerSign.Negative)),
                 Exclude = WorkbenchState.NoGlasses.Union(reader.List("exclude", WorkbenchState.MaxNamedGlasses) ?? []),
                 RankBy = reader.Word("rank", RankBy.ExpectedResidual, _rankWords),
                 PairsPerGlass = Count("each", WorkbenchState.DefaultPairsPerGlass, orAny: true),

@@ -63,6 +63,9 @@ public sealed record WorkbenchState
     /// <summary>Gets the glasses of which each pair must hold at least one.</summary>
     public ImmutableSortedSet<string> Include { get; init; } = NoGlasses;
 
+    /// <summary>Gets the sign of the power that such a glass must take; null allows either.</summary>
+    public PowerSign? IncludeAs { get; init; }
+
     /// <summary>Gets the glasses never to use.</summary>
     public ImmutableSortedSet<string> Exclude { get; init; } = NoGlasses;
 

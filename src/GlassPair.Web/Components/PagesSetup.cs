@@ -9,6 +9,7 @@ public static class PagesSetup
     public static IServiceCollection AddGlassPairPages(this IServiceCollection services, IConfiguration configuration)
     {
         services.AddSingleton<Pages.WorkbenchAnswers>();
+        services.AddScoped<LastRequirement>();
         services.AddSingleton(_ => DemoRequirement.Read(Path.Combine(AppContext.BaseDirectory, "data", "demo", "requirement.json")));
         services.AddRazorComponents().AddInteractiveServerComponents();
         return services;

@@ -155,6 +155,22 @@ public sealed class PairRankingTests
         Assert.Equal(1, shortlist.DroppedCombinations[PairDropReason.NotIncluded]);
     }
 
+    [Theory]
+    [InlineData(PowerSign.Positive, "schott/N-LAK8 + schott/SF1")]
+    [InlineData(PowerSign.Negative, "schott/N-BK7 + schott/N-LAK8")]
+    public void Rank_GlassDemandedWithASign_StandsOnThatSideOnly(PowerSign sign, string pair)
+    {
+        Glass[] glasses = [TestGlasses.Named("schott/N-BK7"), TestGlasses.Named("schott/N-LAK8"), TestGlasses.Named("schott/SF1")];
+        ShortlistRequest request = RankingCases.Objective.By(RankBy.ColorResidual) with
+        {
+            Limits = GlassLimits.None with { Include = GlassLimits.None.Include.Add("schott/N-LAK8"), IncludeAs = sign },
+        };
+
+        Shortlist shortlist = PairRanking.Rank(IndexTable.Of(glasses, RankingCases.Visible), request);
+
+        Assert.Equal(pair, Assert.Single(shortlist.Candidates).Name);
+    }
+
     [Fact]
     public void Rank_KeysEqualToTwelveDigits_BreakByPowersThenByName()
     {

@@ -71,7 +71,10 @@ internal sealed class PlainRanking
     private static PairDropReason? ReasonAgainst(List<GlassIndices> a, List<GlassIndices> b, ShortlistRequest request, out ThinSolution? solution)
     {
         solution = null;
-        if (request.Limits.Include.Count > 0 && !a.Concat(b).Any(g => request.Limits.Include.Contains(g.Glass.Id)))
+        bool isOrdered = a[0].AbbeNumber > b[0].AbbeNumber
+            || (a[0].AbbeNumber == b[0].AbbeNumber && string.CompareOrdinal(a[0].Glass.Id, b[0].Glass.Id) < 0);
+        IEnumerable<GlassIndices> demandable = request.Limits.IncludeAs is not { } sign ? a.Concat(b) : isOrdered == (sign == PowerSign.Positive) ? a : b;
+        if (request.Limits.Include.Count > 0 && !demandable.Any(g => request.Limits.Include.Contains(g.Glass.Id)))
         {
             return PairDropReason.NotIncluded;
         }
@@ -81,8 +84,6 @@ internal sealed class PlainRanking
             return reason;
         }
 
-        bool isOrdered = a[0].AbbeNumber > b[0].AbbeNumber
-            || (a[0].AbbeNumber == b[0].AbbeNumber && string.CompareOrdinal(a[0].Glass.Id, b[0].Glass.Id) < 0);
         (GlassIndices front, GlassIndices rear) = isOrdered ? (a[0], b[0]) : (b[0], a[0]);
         ThinOutcome outcome = ThinPair.Solve(request.Requirement, front, rear);
         if (outcome is ThinSolution first && request.Requirement.AirSpace is null && first.RelativePowers[1] > first.RelativePowers[0])

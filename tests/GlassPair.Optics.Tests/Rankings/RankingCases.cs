@@ -59,6 +59,14 @@ internal static class RankingCases
                     },
                 });
 
+                foreach (PowerSign sign in Enum.GetValues<PowerSign>())
+                {
+                    Add($"glasses to include as {sign}", contact.By(rankBy) with
+                    {
+                        Limits = new GlassLimits { Include = GlassLimits.None.Include.Union(TestGlasses.All.Where((_, i) => i % 105 == 0).Select(g => g.Id)), IncludeAs = sign },
+                    });
+                }
+
                 void Add(string name, ShortlistRequest request) =>
                     cases.Add(string.Create(CultureInfo.InvariantCulture, $"{name}, {balance}, {rankBy}"), request);
             }

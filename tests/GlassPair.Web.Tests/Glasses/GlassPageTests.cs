@@ -1,5 +1,7 @@
 using Bunit;
+using GlassPair.Web.Addresses;
 using GlassPair.Web.Components.Pages;
+using Microsoft.Extensions.DependencyInjection;
 
 namespace GlassPair.Web.Tests.Glasses;
 
@@ -109,6 +111,18 @@ public sealed class GlassPageTests : GlassPagesTestBase
             Assert.StartsWith(glass.Name, page.Find("h1").TextContent, StringComparison.Ordinal);
             Assert.DoesNotContain("NaN", page.Markup, StringComparison.Ordinal);
         }
+    }
+
+    [Theory]
+    [InlineData("Use as positive element", "&as=positive")]
+    [InlineData("Use as negative element", "&as=negative")]
+    public void WayToTheWorkbench_KeepsTheRequirementAndDemandsTheGlass(string words, string sign)
+    {
+        WorkbenchState last = WorkbenchState.Empty.With(NumberField.FocalLength, "240").With(NumberField.FNumber, "6");
+        Services.GetRequiredService<LastRequirement>().State = last with { Exclude = last.Exclude.Add("schott/N-BK7") };
+        string link = Open("schott", "N-BK7").FindAll("a.button").Single(a => a.TextContent.Trim() == words).GetAttribute("href")!;
+        Assert.Equal($"?v=1&f=240&n=6&include=schott/N-BK7{sign}&glass=schott/N-BK7", link);
+        Assert.Equal(link, WorkbenchAddress.Write(WorkbenchAddress.Read(link).State));
     }
 
     [Fact]

@@ -1,4 +1,5 @@
 using Bunit;
+using GlassPair.Web.Addresses;
 using GlassPair.Web.Tests.Charts;
 using GlassPair.Web.Work;
 using Microsoft.AspNetCore.Components;
@@ -17,6 +18,7 @@ public abstract class GlassPagesTestBase : ChartTestBase
         Services.AddSingleton(ServedStock.Library);
         Services.AddSingleton(_gate);
         Services.AddSingleton<ShortlistService>();
+        Services.AddScoped<LastRequirement>();
         JSInterop.Mode = JSRuntimeMode.Loose;
         SetRendererInfo(new RendererInfo("Server", true));
     }

@@ -21,7 +21,7 @@ public sealed class WorkbenchTests : BunitContext
     {
         Services.AddSingleton(ServedStock.Library);
         Services.AddSingleton(Options.Create(new WorkOptions { AtOnce = 2 }));
-        Services.AddSingleton<WorkGate>().AddSingleton<ShortlistService>().AddSingleton<WorkbenchAnswers>();
+        Services.AddSingleton<WorkGate>().AddSingleton<ShortlistService>().AddSingleton<WorkbenchAnswers>().AddScoped<LastRequirement>();
         Services.AddSingleton(TimeProvider.System).AddScoped<CircuitPresence>();
         Services.AddSingleton(new DemoRequirement("A test objective", WorkbenchAddress.Read("?f=240&n=6&makers=hoya").State));
         ComponentFactories.AddStub<GlassMap>();

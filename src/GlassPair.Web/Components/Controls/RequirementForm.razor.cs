@@ -1,5 +1,6 @@
 using System.Collections.Immutable;
 using GlassPair.Optics.Glasses;
+using GlassPair.Optics.Rankings;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
 using GlassPair.Web.Addresses;
@@ -23,6 +24,8 @@ public sealed partial class RequirementForm : ComponentBase
 
     private static readonly (ColorBalance Value, string Text)[] _balances =
         [(ColorBalance.EndsUnited, "Ends united"), (ColorBalance.BandBalanced, "Band balanced")];
+
+    private static readonly (PowerSign? Value, string Text)[] _signs = [(null, "either"), (PowerSign.Positive, "positive"), (PowerSign.Negative, "negative")];
 
     private static readonly (bool Value, string Text)[] _constructions = [(false, "Cemented"), (true, "Air-spaced")];
 

@@ -1,3 +1,4 @@
+using GlassPair.Web.Addresses;
 using Microsoft.AspNetCore.Components;
 
 namespace GlassPair.Web.Components.Glasses;
@@ -7,4 +8,7 @@ public sealed partial class GlassCard : ComponentBase
 {
     /// <summary>Gets or sets the glass; null where none is chosen.</summary>
     [Parameter] public GlassFigures? Figures { get; set; }
+
+    /// <summary>Gets or sets the requirement that the ways lead back to.</summary>
+    [Parameter, EditorRequired] public required LastRequirement Last { get; set; }
 }

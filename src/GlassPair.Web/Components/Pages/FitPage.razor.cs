@@ -2,6 +2,7 @@ using System.Collections.Immutable;
 using System.Globalization;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
+using GlassPair.Web.Addresses;
 using GlassPair.Web.Components.Glasses;
 using GlassPair.Web.Figures;
 using Microsoft.AspNetCore.Components;
@@ -36,6 +37,8 @@ public sealed partial class FitPage : ComponentBase
     private string _shownQuery = "";
     private ErrorBoundary? _chartBoundary;
     private CancellationTokenSource _typing = new();
+
+    [Inject] private LastRequirement Last { get; set; } = null!;
 
     [Inject] private NavigationManager Navigation { get; set; } = null!;
 

@@ -27,6 +27,8 @@ public sealed partial class GlassListPage : ComponentBase
 
     [Inject] private StockLibrary Library { get; set; } = null!;
 
+    [Inject] private LastRequirement Last { get; set; } = null!;
+
     [Inject] private NavigationManager Navigation { get; set; } = null!;
 
     /// <summary>The stock that the page was made from; a newer one does not change a page while it is read.</summary>

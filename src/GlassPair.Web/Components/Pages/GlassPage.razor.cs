@@ -42,6 +42,8 @@ public sealed partial class GlassPage : ComponentBase
 
     [Inject] private ShortlistService Shortlists { get; set; } = null!;
 
+    [Inject] private LastRequirement Last { get; set; } = null!;
+
     [Inject] private NavigationManager Navigation { get; set; } = null!;
 
     private Stock Stock { get; set; } = null!;

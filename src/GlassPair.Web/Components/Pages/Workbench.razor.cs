@@ -43,6 +43,8 @@ public sealed partial class Workbench : ComponentBase
 
     [Inject] private WorkbenchAnswers Answers { get; set; } = null!;
 
+    [Inject] private LastRequirement Last { get; set; } = null!;
+
     [Inject] private NavigationManager Navigation { get; set; } = null!;
 
     [Inject] private DemoRequirement Demo { get; set; } = null!;
@@ -146,6 +148,7 @@ public sealed partial class Workbench : ComponentBase
         (_state, _misread, _isDemo) = (read.IsBlank ? Demo.State : read.State, read.Notices, read.IsBlank);
         _stock = _state.StockId is { } id && Library.TryFind(id, out Stock? stock) ? stock : Library.Current;
         _reading = FormReading.Of(_state, _stock);
+        Last.State = _state;
     }
 
     private void OnStockChanged() => _ = InvokeAsync(StateHasChanged);
@@ -198,6 +201,7 @@ public sealed partial class Workbench : ComponentBase
         _state = next with { StockId = _stock.Id };
         (_misread, _isDemo) = ([], false);
         _reading = FormReading.Of(_state, _stock);
+        Last.State = _state;
     }
 
     private async Task ReplaceAddressAsync()
