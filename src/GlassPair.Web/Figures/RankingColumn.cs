@@ -33,7 +33,7 @@ public sealed record RankingColumn(
     [
         Micrometers("expected", "Expected", "µm RMS", "Color residual to be expected of the glass really delivered: residual and data floor, root-sum-square.", p => p.Expected, true),
         Micrometers("residual", "Residual", "µm RMS", "Weighted standard deviation of the focal shift over the band, from the catalogue's indices.", p => p.Solution.RmsFocalShift),
-        new(BarKey, "Residual, floor", "", "Dark: color residual. Pale: what the data floor adds to it.", p => p.Expected * 1e3, p => "", true),
+        new(BarKey, "Residual", "+ floor", "Dark: color residual. Pale: what the data floor adds to it.", p => p.Expected * 1e3, p => "", true),
         Micrometers("floor", "Data floor", "µm RMS", "The part that index data and melts leave unknown.", p => p.DataFloor),
         Micrometers("range", "Peak to valley", "µm", "Largest minus smallest focal shift over the samples.", p => p.PeakToValley),
         Micrometers("secondary", "Secondary", "µm", "Secondary spectrum: focus of the design wavelength less the mean focus of both ends.", p => p.Solution.SecondarySpectrum),

@@ -23,6 +23,7 @@ public sealed partial class Workbench : ComponentBase
     private WorkbenchState _state = WorkbenchState.Empty;
     private ImmutableArray<string> _misread = [];
     private bool _isDemo;
+    private bool _isSet;
     private Stock _stock = null!;
     private FormReading _reading = null!;
     private WorkbenchAnswer? _answer;
@@ -131,6 +132,18 @@ public sealed partial class Workbench : ComponentBase
         _addressWork.Dispose();
     }
 
+    /// <summary>The page takes no parameters: when the router shows it again after its own change of address, there is nothing to draw.</summary>
+    public override Task SetParametersAsync(ParameterView parameters)
+    {
+        if (_isSet)
+        {
+            return Task.CompletedTask;
+        }
+
+        _isSet = true;
+        return base.SetParametersAsync(parameters);
+    }
+
     /// <inheritdoc/>
     protected override async Task OnInitializedAsync()
     {
@@ -173,7 +186,8 @@ public sealed partial class Workbench : ComponentBase
     private async Task TypeAsync(WorkbenchState next)
     {
         Set(next);
-        await Task.WhenAll(AnswerAsync(_pause), ReplaceAddressAsync());
+        _ = ReplaceAddressAsync();
+        await AnswerAsync(_pause);
     }
 
     private async Task PickAsync(WorkbenchState next)
