@@ -103,7 +103,7 @@ public sealed class DataTableTests : BunitContext
 
     private IRenderedComponent<DataTable<string>> Table(
         string[] items, string? current = null, string? sortBy = null, Dictionary<int, string>? headings = null, string[]? pinned = null) => Render<DataTable<string>>(p => p
-        .Add(t => t.Label, "Animals").Add(t => t.Items, items).Add(t => t.RowHeader, "name").Add(t => t.KeyOf, i => i).Add(t => t.NameOf, i => i)
+        .Add(t => t.Label, "Animals").Add(t => t.Items, items).Add(t => t.RowHeader, "name").Add(t => t.KeyOf, i => i)
         .Add(t => t.Columns,
         [
             new DataColumn<string>("name", "Name", "", "What it is called.", item => builder => builder.AddContent(0, item), true, false),

@@ -28,9 +28,6 @@ public sealed partial class DataTable<TItem> : ComponentBase
     /// <summary>Gets or sets what tells one row from another.</summary>
     [Parameter, EditorRequired] public required Func<TItem, object> KeyOf { get; set; }
 
-    /// <summary>Gets or sets a row's name in full.</summary>
-    [Parameter, EditorRequired] public required Func<TItem, string> NameOf { get; set; }
-
     /// <summary>Gets or sets where the name of a row leads; null makes it a button that chooses the row.</summary>
     [Parameter] public Func<TItem, string>? AddressOf { get; set; }
 
@@ -50,7 +47,7 @@ public sealed partial class DataTable<TItem> : ComponentBase
     [Parameter] public bool SortDescending { get; set; }
 
     /// <summary>Gets or sets the height of a row, pixels.</summary>
-    [Parameter] public float RowHeight { get; set; } = 22;
+    [Parameter] public float RowHeight { get; set; } = 24;
 
     /// <summary>Gets or sets what stands where there are no rows.</summary>
     [Parameter] public string Empty { get; set; } = "Nothing to show.";

@@ -95,7 +95,7 @@ public sealed partial class RankingTable : ComponentBase
         [
             new DataColumn<RankedPair>("rank", "#", "", "Rank for the requirement; P pins the row in focus.", RankCell, true, true, "place"),
             new DataColumn<RankedPair>("positive", "Positive", "", "The glass of positive power.", PositiveCell, false, false),
-            new DataColumn<RankedPair>("negative", "Negative", "", "The glass of negative power.", NameCell(p => p.Negative.Glass), false, false, "c2"),
+            new DataColumn<RankedPair>("negative", "Negative", "", "The glass of negative power.", NegativeCell, false, false, "c2"),
             .. Shown.Select(c => new DataColumn<RankedPair>(c.Key, c.Title, c.Unit, c.Meaning, CellOf(c), c.Value is not null, c.Value is not null && c.Key is not (RankingColumn.BarKey or RankingColumn.SupplyKey), ClassOf(c))),
         ];
         Visible = RankingView.Of(Pairs, State);
@@ -107,9 +107,6 @@ public sealed partial class RankingTable : ComponentBase
 
     private static RenderFragment<RankedPair> RankCell => pair => builder =>
         builder.AddContent(0, pair.Candidate?.Rank.ToString(CultureInfo.InvariantCulture) ?? "–");
-
-    private static string NameOf(RankedPair pair) =>
-        $"{pair.Positive.Glass.Name} {pair.Positive.Glass.Maker} with {pair.Negative.Glass.Name} {pair.Negative.Glass.Maker}";
 
     private static string SupplyWords(RankedPair pair) => $"{FigureText.Of(pair.Positive.Glass.Supply)}, {FigureText.Of(pair.Negative.Glass.Supply)}";
 

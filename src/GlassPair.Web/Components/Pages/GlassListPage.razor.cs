@@ -61,8 +61,6 @@ public sealed partial class GlassListPage : ComponentBase
             CanSort: true, c.IsNumber, c.Class)),
     ];
 
-    private static string NameOf(GlassFigures figures) => $"{figures.Glass.Name}, {figures.Glass.Maker}";
-
     /// <inheritdoc/>
     public void Dispose()
     {
