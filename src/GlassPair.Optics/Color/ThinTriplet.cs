@@ -1,3 +1,4 @@
+using System.Collections.Immutable;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
 
@@ -15,13 +16,15 @@ public static class ThinTriplet
             throw new ArgumentException("A thin triplet is solved in contact: leave the air space out.", nameof(requirement));
         }
 
+        // Always solved in the same order, so that the powers are the same to the last bit in whatever order the glasses come.
+        ImmutableArray<GlassIndices> glasses = [first, second, third];
+        ImmutableArray<GlassIndices> ordered = [.. glasses.OrderByDescending(g => g.AbbeNumber).ThenBy(g => g.Glass.Id, StringComparer.Ordinal)];
         (double p2, double p3) = requirement.Balance == ColorBalance.EndsUnited
-            ? ThreeUnited(first, second, third)
-            : BandBalanced(first, second, third, requirement.Band);
-        double p1 = 1.0 - p2 - p3;
-        double largest = Math.Max(Math.Abs(p1), Math.Max(Math.Abs(p2), Math.Abs(p3)));
-        return largest <= ThinSolution.LargestPower
-            ? new ThinSolution(requirement, [first, second, third], [p1, p2, p3])
+            ? ThreeUnited(ordered[0], ordered[1], ordered[2])
+            : BandBalanced(ordered[0], ordered[1], ordered[2], requirement.Band);
+        double[] powers = [1.0 - p2 - p3, p2, p3];
+        return powers.All(p => Math.Abs(p) <= ThinSolution.LargestPower)
+            ? new ThinSolution(requirement, glasses, [.. glasses.Select(g => powers[ordered.IndexOf(g)])])
             : new NoThinSolution(
                 NoThinSolutionReason.DispersionsAlike,
                 $"{first.Glass.Id}, {second.Glass.Id} and {third.Glass.Id} disperse too much alike over this band: no finite powers balance them.");

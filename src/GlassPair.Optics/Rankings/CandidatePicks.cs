@@ -3,17 +3,18 @@ using GlassPair.Optics.Color;
 namespace GlassPair.Optics.Rankings;
 
 /// <summary>Picks the candidates of a request in the order of the ranking, none of its glasses more often than it allows.</summary>
-internal sealed class CandidatePicks(ShortlistRequest request)
+/// <param name="request">The request.</param>
+/// <param name="poolPerPick">How many candidates to have at hand for each pick where glasses may not stand in any number of them: many of the best share a glass.</param>
+internal sealed class CandidatePicks(ShortlistRequest request, int poolPerPick)
 {
-    // Of the best candidates many share a glass.
-    private const int PoolPerPick = 16;
+    private const int LargestPool = 100_000;
     private readonly Dictionary<GlassIndices, int> _uses = [];
 
     /// <summary>Gets the picks, best first.</summary>
     public List<ThinSolution> Solutions { get; } = [];
 
-    /// <summary>Gets how many candidates to look at in one go.</summary>
-    public int PoolSize => request.PairsPerGlass is null ? request.Take : PoolPerPick * request.Take;
+    /// <summary>Gets how many candidates to have at hand.</summary>
+    public int PoolSize => request.PairsPerGlass is null ? request.Take : Math.Max(request.Take, Math.Min(poolPerPick * request.Take, LargestPool));
 
     /// <summary>Tells whether a glass may stand in a further candidate.</summary>
     public bool MayUse(GlassIndices glass) => request.PairsPerGlass is not { } most || _uses.GetValueOrDefault(glass) < most;

@@ -1,7 +1,11 @@
 namespace GlassPair.Optics.Rankings;
 
 /// <summary>Two glasses, or three, by their places in a table; <see cref="Third"/> is −1 for two.</summary>
-internal readonly record struct Combination(int First, int Second, int Third = -1);
+internal readonly record struct Combination(int First, int Second, int Third = -1)
+{
+    /// <summary>Gets the places of the glasses.</summary>
+    public int[] Places => Third < 0 ? [First, Second] : [First, Second, Third];
+}
 
 /// <summary>Keeps the combinations with the smallest keys of very many, in little room.</summary>
 /// <param name="wanted">How many to keep at least, 1 or more.</param>

@@ -1,3 +1,4 @@
+using System.Diagnostics;
 using System.Runtime.CompilerServices;
 using System.Runtime.Intrinsics;
 
@@ -12,6 +13,7 @@ internal interface ILanes<T>
 
     static abstract T All(double value);
 
+    /// <summary>Reads from a column, which reaches a vector's width past its last value of use: only the start is checked.</summary>
     static abstract T Load(double[] column, int start);
 
     static abstract T operator +(T left, T right);
@@ -51,6 +53,7 @@ internal interface ILanes<T>
     /// <summary>Gets a mask as bits, the first lane lowest.</summary>
     static abstract uint Bits(T mask);
 
+    /// <summary>Writes to a column, which reaches as far as for <see cref="Load"/>.</summary>
     void Store(double[] column, int start);
 }
 
@@ -65,7 +68,11 @@ internal readonly struct Lanes512(Vector512<double> value) : ILanes<Lanes512>
     public static Lanes512 All(double value) => new(Vector512.Create(value));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes512 Load(double[] column, int start) => new(Vector512.Create(column, start));
+    public static Lanes512 Load(double[] column, int start)
+    {
+        Debug.Assert(start + Count <= column.Length, "The column is not padded.");
+        return new(Vector512.LoadUnsafe(ref column[start]));
+    }
 
     public static Lanes512 operator +(Lanes512 left, Lanes512 right) => new(left._value + right._value);
 
@@ -105,7 +112,11 @@ internal readonly struct Lanes512(Vector512<double> value) : ILanes<Lanes512>
     public static uint Bits(Lanes512 mask) => (uint)mask._value.ExtractMostSignificantBits();
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public void Store(double[] column, int start) => _value.CopyTo(column, start);
+    public void Store(double[] column, int start)
+    {
+        Debug.Assert(start + Count <= column.Length, "The column is not padded.");
+        _value.StoreUnsafe(ref column[start]);
+    }
 }
 
 /// <summary>Four lanes.</summary>
@@ -119,7 +130,11 @@ internal readonly struct Lanes256(Vector256<double> value) : ILanes<Lanes256>
     public static Lanes256 All(double value) => new(Vector256.Create(value));
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public static Lanes256 Load(double[] column, int start) => new(Vector256.Create(column, start));
+    public static Lanes256 Load(double[] column, int start)
+    {
+        Debug.Assert(start + Count <= column.Length, "The column is not padded.");
+        return new(Vector256.LoadUnsafe(ref column[start]));
+    }
 
     public static Lanes256 operator +(Lanes256 left, Lanes256 right) => new(left._value + right._value);
 
@@ -159,5 +174,9 @@ internal readonly struct Lanes256(Vector256<double> value) : ILanes<Lanes256>
     public static uint Bits(Lanes256 mask) => mask._value.ExtractMostSignificantBits();
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    public void Store(double[] column, int start) => _value.CopyTo(column, start);
+    public void Store(double[] column, int start)
+    {
+        Debug.Assert(start + Count <= column.Length, "The column is not padded.");
+        _value.StoreUnsafe(ref column[start]);
+    }
 }

@@ -14,7 +14,7 @@ namespace GlassPair.Optics.Rankings;
 internal static class PairKernel
 {
     /// <summary>Solves row <paramref name="front"/> by the fastest form that this processor has.</summary>
-    public static void Fill(PairColumns glasses, int front, PairFigures row)
+    public static void Fill(GlassColumns glasses, int front, RowFigures row)
     {
         if (Vector512.IsHardwareAccelerated)
         {
@@ -32,7 +32,7 @@ internal static class PairKernel
 
     /// <summary>Solves a row, a pair at a time.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    public static void FillScalar(PairColumns glasses, int front, PairFigures row)
+    public static void FillScalar(GlassColumns glasses, int front, RowFigures row)
     {
         double focal = glasses.Requirement.FocalLength;
         double space = glasses.Space;
@@ -41,7 +41,7 @@ internal static class PairKernel
         for (int rear = front + 1; rear < glasses.Count; rear++)
         {
             (double p1, double p2) = Powers(glasses, front, rear);
-            (row.FrontPower[rear], row.RearPower[rear]) = (p1, p2);
+            (row.Powers[0][rear], row.Powers[1][rear]) = (p1, p2);
             if (Math.Max(Math.Abs(p1), Math.Abs(p2)) > glasses.PowerLimit)
             {
                 continue;
@@ -81,7 +81,7 @@ internal static class PairKernel
 
     /// <summary>Vector twin of <see cref="FillScalar"/>: lane l holds partner rear + l.</summary>
     [MethodImpl(MethodImplOptions.AggressiveOptimization)]
-    public static void FillVector<T>(PairColumns glasses, int front, PairFigures row)
+    public static void FillVector<T>(GlassColumns glasses, int front, RowFigures row)
         where T : unmanaged, ILanes<T>
     {
         T one = T.All(1.0);
@@ -93,8 +93,8 @@ internal static class PairKernel
         for (int rear = front + 1; rear < glasses.Count; rear += T.Count)
         {
             (T p1, T p2) = Powers<T>(glasses, front, rear);
-            p1.Store(row.FrontPower, rear);
-            p2.Store(row.RearPower, rear);
+            p1.Store(row.Powers[0], rear);
+            p2.Store(row.Powers[1], rear);
             if (T.Bits(T.AtMost(T.Max(T.Abs(p1), T.Abs(p2)), powerLimit)) == 0)
             {
                 continue;
@@ -134,7 +134,7 @@ internal static class PairKernel
     }
 
     /// <summary>Both powers as <see cref="PairRanking.Solve"/> finds them; NaN where it finds none.</summary>
-    private static (double Front, double Rear) Powers(PairColumns glasses, int front, int rear)
+    private static (double Front, double Rear) Powers(GlassColumns glasses, int front, int rear)
     {
         double space = glasses.Space;
         bool endsUnited = glasses.Requirement.Balance == ColorBalance.EndsUnited;
@@ -162,7 +162,7 @@ internal static class PairKernel
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (T Front, T Rear) Powers<T>(PairColumns glasses, int front, int rear)
+    private static (T Front, T Rear) Powers<T>(GlassColumns glasses, int front, int rear)
         where T : unmanaged, ILanes<T>
     {
         T one = T.All(1.0);
@@ -226,7 +226,7 @@ internal static class PairKernel
     }
 
     /// <summary>c₂·(c₂ − c₁), c₁·(c₁ − c₂) and |c₂ − c₁|² of <see cref="ThinPair.BandBalanced"/>.</summary>
-    private static (double AlongRear, double AlongFront, double Gap) Balance(PairColumns glasses, int front, int rear)
+    private static (double AlongRear, double AlongFront, double Gap) Balance(GlassColumns glasses, int front, int rear)
     {
         double alongRear = 0.0;
         double alongFront = 0.0;
@@ -246,7 +246,7 @@ internal static class PairKernel
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (T AlongRear, T AlongFront, T Gap) Balance<T>(PairColumns glasses, int front, int rear)
+    private static (T AlongRear, T AlongFront, T Gap) Balance<T>(GlassColumns glasses, int front, int rear)
         where T : unmanaged, ILanes<T>
     {
         double[] weights = glasses.Weights;

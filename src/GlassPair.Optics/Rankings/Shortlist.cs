@@ -30,6 +30,9 @@ public sealed record ShortlistRequest(
 {
     /// <summary>The most candidates that can be asked for.</summary>
     public const int MaxTake = 5_000;
+
+    /// <summary>Gets how many elements a candidate has: 2, see <see cref="PairRanking"/>, or 3, see <see cref="TripletRanking"/>.</summary>
+    public int Elements { get; init => field = value is 2 or 3 ? value : throw new ArgumentOutOfRangeException(nameof(Elements), value, "Must be 2 or 3."); } = 2;
 }
 
 /// <summary>One choice of glasses: the glass of positive power first, the rest in falling power.</summary>

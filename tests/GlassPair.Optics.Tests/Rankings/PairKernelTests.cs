@@ -40,8 +40,8 @@ public sealed class PairKernelTests
         Requirement requirement = RankingCases.All[name].Requirement;
         GlassIndices[] rows = [.. RankingCases.Every(1, requirement.Band).Rows];
         // to reach 1,600 over a band that fewer glasses cover, the rest stand there twice: a pair of equal dispersions has no solution
-        var glasses = new PairColumns(requirement, DataQuality.UsualSupply, rows.Concat(rows).Take(length));
-        (PairFigures scalar, PairFigures eight, PairFigures four) = (new(glasses), new(glasses), new(glasses));
+        var glasses = new GlassColumns(requirement, DataQuality.UsualSupply, rows.Concat(rows).Take(length));
+        (RowFigures scalar, RowFigures eight, RowFigures four) = (new(glasses, 2), new(glasses, 2), new(glasses, 2));
         // the shortest row and the longest are among them
         for (int front = 0; front < glasses.Count; front += 1 + (glasses.Count / 40))
         {
@@ -62,8 +62,8 @@ public sealed class PairKernelTests
     {
         ShortlistRequest request = RankingCases.All[name];
         Requirement requirement = request.Requirement;
-        var glasses = new PairColumns(requirement, request.Quality, RankingCases.Every(12, requirement.Band).Rows);
-        var row = new PairFigures(glasses);
+        var glasses = new GlassColumns(requirement, request.Quality, RankingCases.Every(12, requirement.Band).Rows);
+        var row = new RowFigures(glasses, 2);
         int solved = 0;
         for (int front = 0; front < glasses.Count; front++)
         {
@@ -72,13 +72,13 @@ public sealed class PairKernelTests
             {
                 if (PairRanking.Solve(requirement, glasses.Glasses[front], glasses.Glasses[rear]) is not ThinSolution solution)
                 {
-                    Assert.Equal(double.NaN, row.FrontPower[rear]);
+                    Assert.Equal(double.NaN, row.Powers[0][rear]);
                     continue;
                 }
 
                 solved++;
                 int first = solution.Elements[0] == glasses.Glasses[front] ? 0 : 1;
-                Assert.Equal([solution.RelativePowers[first], solution.RelativePowers[1 - first]], [row.FrontPower[rear], row.RearPower[rear]]);
+                Assert.Equal([solution.RelativePowers[first], solution.RelativePowers[1 - first]], [row.Powers[0][rear], row.Powers[1][rear]]);
                 if (!(solution.LargestElementPower > requirement.ElementPowerLimit))
                 {
                     Assert.Equal(
@@ -92,9 +92,9 @@ public sealed class PairKernelTests
     }
 
     /// <summary>The figures of one pair; past the power limit only the powers are defined, and without powers nothing is.</summary>
-    private static double[] Figures(PairFigures row, int rear, Requirement requirement)
+    private static double[] Figures(RowFigures row, int rear, Requirement requirement)
     {
-        (double p1, double p2) = (row.FrontPower[rear], row.RearPower[rear]);
+        (double p1, double p2) = (row.Powers[0][rear], row.Powers[1][rear]);
         return !double.IsFinite(p1) || Math.Max(Math.Abs(p1), Math.Abs(p2)) > requirement.ElementPowerLimit
             ? [p1, p2]
             : [p1, p2, row.Rms[rear], row.PeakToValley[rear], row.SecondarySpectrum[rear], row.ExpectedRms[rear]];

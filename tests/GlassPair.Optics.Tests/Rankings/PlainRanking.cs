@@ -2,16 +2,17 @@ using System.Collections.Immutable;
 using System.Globalization;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Rankings;
+using GlassPair.Optics.Requirements;
 
 namespace GlassPair.Optics.Tests.Rankings;
 
-/// <summary>The ranking as its words define it: solve every pair, drop what the limits drop, sort all, pick from the top.</summary>
+/// <summary>The ranking as its words define it: solve every combination, drop what the limits drop, sort all, pick from the top.</summary>
 internal sealed class PlainRanking
 {
     private PlainRanking(List<ThinSolution> solutions, SortedDictionary<PairDropReason, long> dropped, long examined) =>
         (Solutions, Dropped, Examined) = (solutions, dropped, examined);
 
-    /// <summary>Gets the feasible pairs in the order of the ranking.</summary>
+    /// <summary>Gets the feasible combinations in the order of the ranking.</summary>
     public List<ThinSolution> Solutions { get; }
 
     public SortedDictionary<PairDropReason, long> Dropped { get; }
@@ -26,10 +27,13 @@ internal sealed class PlainRanking
         List<ThinSolution> solutions = [];
         SortedDictionary<PairDropReason, long> dropped = [];
         long examined = 0;
-        foreach ((List<GlassIndices> a, List<GlassIndices> b) in groups.SelectMany((a, i) => groups.Skip(i + 1).Select(b => (a, b))))
+        IEnumerable<List<GlassIndices>[]> combinations = request.Elements == 2
+            ? groups.SelectMany((a, i) => groups.Skip(i + 1).Select(b => new[] { a, b }))
+            : groups.SelectMany((a, i) => groups.SelectMany((b, j) => j > i ? groups.Skip(j + 1).Select(c => new[] { a, b, c }) : []));
+        foreach (List<GlassIndices>[] combination in combinations)
         {
             examined++;
-            if (ReasonAgainst(a, b, request, out ThinSolution? solution) is { } reason)
+            if (ReasonAgainst(combination, request, out ThinSolution? solution) is { } reason)
             {
                 dropped[reason] = dropped.GetValueOrDefault(reason) + 1;
             }
@@ -68,27 +72,40 @@ internal sealed class PlainRanking
         }
     }
 
-    private static PairDropReason? ReasonAgainst(List<GlassIndices> a, List<GlassIndices> b, ShortlistRequest request, out ThinSolution? solution)
+    private static PairDropReason? ReasonAgainst(List<GlassIndices>[] combination, ShortlistRequest request, out ThinSolution? solution)
     {
         solution = null;
-        bool isOrdered = a[0].AbbeNumber > b[0].AbbeNumber
-            || (a[0].AbbeNumber == b[0].AbbeNumber && string.CompareOrdinal(a[0].Glass.Id, b[0].Glass.Id) < 0);
-        IEnumerable<GlassIndices> demandable = request.Limits.IncludeAs is not { } sign ? a.Concat(b) : isOrdered == (sign == PowerSign.Positive) ? a : b;
-        if (request.Limits.Include.Count > 0 && !demandable.Any(g => request.Limits.Include.Contains(g.Glass.Id)))
+        List<GlassIndices>[] ordered = [.. combination.OrderByDescending(g => g[0].AbbeNumber).ThenBy(g => g[0].Glass.Id, StringComparer.Ordinal)];
+        List<GlassIndices>[] demandable = combination.Length > 2 ? combination : request.Limits.IncludeAs switch
+        {
+            PowerSign.Positive => ordered[..1],
+            PowerSign.Negative => ordered[1..],
+            _ => combination,
+        };
+        if (request.Limits.Include.Count > 0 && !demandable.SelectMany(g => g).Any(g => request.Limits.Include.Contains(g.Glass.Id)))
         {
             return PairDropReason.NotIncluded;
         }
 
-        if (request.Limits.ReasonAgainst(a[0].Glass, b[0].Glass) is { } reason)
+        GlassIndices[] glasses = [.. ordered.Select(g => g[0])];
+        if (request.Limits.ExpansionDifference is { } most)
         {
-            return reason;
+            double?[] expansions = [.. glasses.Select(g => g.Glass.ExpansionPerKelvin)];
+            if (expansions.Any(e => e is null))
+            {
+                return PairDropReason.ExpansionUnknown;
+            }
+
+            if (expansions.Any(a => expansions.Any(b => a - b > most)))
+            {
+                return PairDropReason.ExpansionDifference;
+            }
         }
 
-        (GlassIndices front, GlassIndices rear) = isOrdered ? (a[0], b[0]) : (b[0], a[0]);
-        ThinOutcome outcome = ThinPair.Solve(request.Requirement, front, rear);
-        if (outcome is ThinSolution first && request.Requirement.AirSpace is null && first.RelativePowers[1] > first.RelativePowers[0])
+        ThinOutcome outcome = Solve(request.Requirement, glasses);
+        if (outcome is ThinSolution first && request.Requirement.AirSpace is null)
         {
-            outcome = ThinPair.Solve(request.Requirement, rear, front);
+            outcome = Solve(request.Requirement, [.. first.Elements.Zip(first.RelativePowers).OrderByDescending(e => e.Second).Select(e => e.First)]);
         }
 
         solution = outcome as ThinSolution;
@@ -100,6 +117,10 @@ internal sealed class PlainRanking
             _ => null,
         };
     }
+
+    private static ThinOutcome Solve(Requirement requirement, GlassIndices[] glasses) => glasses.Length == 2
+        ? ThinPair.Solve(requirement, glasses[0], glasses[1])
+        : ThinTriplet.Solve(requirement, glasses[0], glasses[1], glasses[2]);
 
     private static double KeyOf(ThinSolution solution, ShortlistRequest request) => request.RankBy switch
     {

@@ -3,16 +3,16 @@ using GlassPair.Optics.Requirements;
 
 namespace GlassPair.Optics.Rankings;
 
-/// <summary>Glasses as columns of numbers, by falling Abbe number, for the kernel that solves one glass with all that follow it.</summary>
+/// <summary>Glasses as columns of numbers, by falling Abbe number, for the kernels that solve one or two glasses with all that follow.</summary>
 /// <remarks>
 /// By this order the first glass of a pair is always the front one. Behind the last glass its numbers are repeated, so that a vector
 /// may read past the end.
 /// </remarks>
-internal sealed class PairColumns
+internal sealed class GlassColumns
 {
     private const int Padding = 8;
 
-    public PairColumns(Requirement requirement, DataQuality quality, IEnumerable<GlassIndices> glasses)
+    public GlassColumns(Requirement requirement, DataQuality quality, IEnumerable<GlassIndices> glasses)
     {
         Requirement = requirement;
         Glasses = [.. glasses.OrderByDescending(g => g.AbbeNumber)];
