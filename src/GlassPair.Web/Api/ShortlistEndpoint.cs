@@ -30,6 +30,11 @@ internal static class ShortlistEndpoint
 
         CheckIds(json.Exclude, "exclude", faults);
         CheckIds(json.Include, "include", faults);
+        if (json.Elements == 3)
+        {
+            SolutionEndpoints.CheckInContact(json.Requirement, faults);
+        }
+
         if (requirement is null || faults.Any)
         {
             return Problems.Faulty(faults);
@@ -48,7 +53,13 @@ internal static class ShortlistEndpoint
             ChosenGlassesJson.QualityOf(json.AbbeTolerancePercent, json.IndexPrecision),
             json.RankBy ?? RankBy.ColorResidual,
             json.Take ?? UsualTake,
-            json.PairsPerGlass);
+            json.PairsPerGlass) { Elements = json.Elements ?? 2 };
+        if (request.Elements == 3 && TripletRanking.FindFault(request) is { } fault)
+        {
+            faults.Add("elements", fault);
+            return Problems.Faulty(faults);
+        }
+
         return TypedResults.Ok(new ShortlistJson(await shortlists.RankAsync(stock, request, cancellation)));
     }
 

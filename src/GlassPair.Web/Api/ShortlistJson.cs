@@ -17,6 +17,7 @@ public sealed record ShortlistJson
         CombinationsExamined = shortlist.CombinationsExamined;
         CombinationsFeasible = shortlist.CombinationsFeasible;
         CombinationsHolding = shortlist.CombinationsHolding;
+        MaxElementPower = shortlist.Request.Requirement.ElementPowerLimit;
         DroppedGlasses = shortlist.DroppedGlasses.GroupBy(d => d.Reason).OrderBy(g => g.Key).ToDictionary(g => g.Key, g => g.Count());
         DroppedCombinations = new(shortlist.DroppedCombinations);
         ElapsedMs = answer.Elapsed.TotalMilliseconds;
@@ -40,6 +41,9 @@ public sealed record ShortlistJson
 
     /// <summary>Gets how many feasible combinations stay inside the quarter wave at the required f-number.</summary>
     public long CombinationsHolding { get; }
+
+    /// <summary>Gets the limit on |φᵢ|/Φ that was applied: the requirement's, or 4 for three elements without one; null where none was.</summary>
+    public double? MaxElementPower { get; }
 
     /// <summary>Gets how many glasses were not considered, by reason.</summary>
     public Dictionary<GlassDropReason, int> DroppedGlasses { get; }

@@ -38,8 +38,8 @@ public sealed record ShortlistRequestJson
     /// <summary>Gets the figure to rank by, smallest first; left out, <c>colorResidual</c>.</summary>
     public RankBy? RankBy { get; init; }
 
-    /// <summary>Gets how many elements, 2; left out, 2.</summary>
-    [Range(2, 2)]
+    /// <summary>Gets how many elements, 2 or 3; left out, 2. Three stand in contact, and the element power is limited to 4 where the requirement sets no limit.</summary>
+    [Range(2, 3)]
     public int? Elements { get; init; }
 
     /// <summary>Gets how many candidates to answer with, 1 to 5,000; left out, 50.</summary>

@@ -42,14 +42,15 @@ public sealed class ShortlistService(WorkGate gate)
         return table.Value;
     }
 
-    /// <summary>Ranks the pairs of a stock.</summary>
+    /// <summary>Ranks the pairs or triplets of a stock.</summary>
     /// <exception cref="ServerBusyException">Too much is waiting, or the work ran too long; the message is a sentence for the user.</exception>
     /// <exception cref="OperationCanceledException">The caller ended it.</exception>
     public Task<ShortlistAnswer> RankAsync(Stock stock, ShortlistRequest request, CancellationToken cancellation) => gate.RunAsync(
         stop =>
         {
             long start = Stopwatch.GetTimestamp();
-            Shortlist shortlist = PairRanking.Rank(TableOf(stock, request.Requirement.Band), request, stop);
+            IndexTable table = TableOf(stock, request.Requirement.Band);
+            Shortlist shortlist = request.Elements == 3 ? TripletRanking.Rank(table, request, stop) : PairRanking.Rank(table, request, stop);
             return new ShortlistAnswer(stock, shortlist, Stopwatch.GetElapsedTime(start));
         },
         cancellation);

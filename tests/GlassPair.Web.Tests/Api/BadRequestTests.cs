@@ -108,12 +108,25 @@ public sealed class BadRequestTests(WebApplicationFactory<Program> factory) : Ap
     }
 
     [Theory]
+    [InlineData("9", ",\"construction\":\"airSpaced\",\"spacingMm\":1", "requirement.construction")]
+    [InlineData("3", "", "elements")]
+    public async Task Shortlist_OfThreeElementsThatCannotBeRanked_IsRefusedWithTheReason(string samples, string more, string path)
+    {
+        string body = $$"""
+            {"elements":3,"makers":["lzos"],"requirement":{"focalLengthMm":250,"fNumber":6{{more}},
+            "band":{"shortNm":486,"designNm":550,"longNm":656,"samples":{{samples}} } } }
+            """;
+        JsonElement problem = await Post("/api/v1/shortlist", body, HttpStatusCode.BadRequest);
+        Assert.Equal([path], problem.GetProperty("errors").EnumerateObject().Select(e => e.Name));
+    }
+
+    [Theory]
     [InlineData("\"rankBy\":\"price\"", "rankBy", "\"colorResidual\", \"expectedResidual\", \"secondarySpectrum\"")]
     [InlineData("\"rankBy\":\"designedWavefront\"", "rankBy", "\"colorResidual\"")]
     [InlineData("\"take\":0", "take", "1 to 5000")]
     [InlineData("\"take\":5001", "take", "1 to 5000")]
     [InlineData("\"take\":\"10\"", "take", "1 to 5000")]
-    [InlineData("\"elements\":4", "elements", "whole number")]
+    [InlineData("\"elements\":4", "elements", "2 to 3")]
     [InlineData("\"makers\":[]", "makers", "1 to 2000")]
     [InlineData("\"makers\":[\"schott\",\"nobody\"]", "makers[1]", "Makers: cdgm")]
     [InlineData("\"supply\":[\"onrequest\"]", "supply[0]", "\"onRequest\"")]

@@ -52,6 +52,26 @@ public sealed class ShortlistTests(WebApplicationFactory<Program> factory) : Api
     }
 
     [Fact]
+    public async Task Shortlist_OfThreeElements_IsWhatTripletSaysOfItsGlasses()
+    {
+        JsonElement answer = await Rank(""","elements":3,"makers":["lzos","schott"],"take":20""");
+        long distinct = answer.GetProperty("distinctGlasses").GetInt64();
+        Assert.Equal(distinct * (distinct - 1) * (distinct - 2) / 6, answer.GetProperty("combinationsExamined").GetInt64());
+        double limit = answer.GetProperty("maxElementPower").GetDouble();
+        JsonElement[] candidates = [.. answer.GetProperty("candidates").EnumerateArray()];
+        Assert.Equal(20, candidates.Length);
+        Assert.All(candidates, c =>
+        {
+            double[] powers = Numbers(c.GetProperty("relativePowers"));
+            Assert.Equal(3, powers.Length);
+            Assert.Equal(powers.OrderDescending(), powers);
+            Assert.InRange(powers.Max(Math.Abs), 0.0, limit);
+        });
+        JsonElement triplet = await Post("/api/v1/triplet", $$"""{"requirement":{{Requirement}},"glasses":{{candidates[0].GetProperty("glasses").GetRawText()}}}""");
+        Assert.All(triplet.EnumerateObject(), p => Assert.Equal(p.Value.GetRawText(), candidates[0].GetProperty(p.Name).GetRawText()));
+    }
+
+    [Fact]
     public async Task Shortlist_WithLimits_KeepsToThem()
     {
         JsonElement answer = await Rank(
