@@ -12,7 +12,7 @@ export function placeLabels({ width, height, size, font, labels, guides, note, d
   const obstacles = {
     boxes: disks.map(({ at: [x, y], radius: r }) => ({ x: x - r, y: y - r, w: 2 * r, h: 2 * r })),
     lines: lines.flatMap(({ isMain, lines: all }) => all.flatMap(sides).map(ends => ({ ends, weight: isMain ? 40 : 2 }))),
-    dots: dots.filter(dot => isIn(dot, bounds)),
+    dotsIn: counterOf(dots, width, height),
   };
   const placed = [];
   const put = (label, candidates) => {
@@ -57,18 +57,40 @@ const along = ([[x0, y0], [x1, y1]], w, h) => [0.5, 0.4, 0.6, 0.3, 0.7, 0.2, 0.8
 });
 
 /** What a label would cover: the edge of the picture most, other labels nearly as much, then the lines it must not cross, then dots. */
-function costOf(box, bounds, { boxes, lines, dots }) {
+function costOf(box, bounds, { boxes, lines, dotsIn }) {
+  const around = { x: box.x - 2, y: box.y - 2, w: box.w + 4, h: box.h + 4 };
   return (box.w * box.h - overlap(box, bounds)) * 10
     + boxes.reduce((sum, other) => sum + overlap(box, other) * 4, 0)
-    + lines.reduce((sum, { ends, weight }) => sum + (clip(...ends, grown(box, 2)) ? weight : 0), 0)
-    + dots.reduce((sum, dot) => sum + (isIn(dot, box) ? 1.5 : 0), 0);
+    + lines.reduce((sum, { ends: [from, to], weight }) => sum + (mayMeet(from, to, around) && clip(from, to, around) ? weight : 0), 0)
+    + dotsIn(box) * 1.5;
+}
+
+const cell = 8;
+
+/** Counts dots once into cells, so that those in a box are a sum over a few cells instead of a look at every dot. */
+function counterOf(dots, width, height) {
+  const [columns, rows] = [Math.ceil(width / cell), Math.ceil(height / cell)];
+  const counts = new Uint16Array(columns * rows);
+  for (const [x, y] of dots) {
+    if (x >= 0 && y >= 0 && x < width && y < height) counts[Math.floor(y / cell) * columns + Math.floor(x / cell)]++;
+  }
+  const index = (length, most) => clamp(Math.floor(length / cell), 0, most - 1);
+  return ({ x, y, w, h }) => {
+    let sum = 0;
+    for (let row = index(y, rows); row <= index(y + h, rows); row++) {
+      for (let column = index(x, columns); column <= index(x + w, columns); column++) sum += counts[row * columns + column];
+    }
+    return sum;
+  };
 }
 
 export const clamp = (value, least, most) => Math.min(Math.max(value, least), most);
 export const sides = points => points.slice(1).map((point, i) => [points[i], point]);
-const grown = (box, by) => ({ x: box.x - by, y: box.y - by, w: box.w + 2 * by, h: box.h + 2 * by });
 const isIn = ([x, y], box) => x >= box.x && x <= box.x + box.w && y >= box.y && y <= box.y + box.h;
 const overlap = (a, b) => Math.max(0, Math.min(a.x + a.w, b.x + b.w) - Math.max(a.x, b.x)) * Math.max(0, Math.min(a.y + a.h, b.y + b.h) - Math.max(a.y, b.y));
+
+const mayMeet = ([x0, y0], [x1, y1], { x, y, w, h }) =>
+  Math.max(x0, x1) >= x && Math.min(x0, x1) <= x + w && Math.max(y0, y1) >= y && Math.min(y0, y1) <= y + h;
 
 /** The part of a segment inside a box, by the method of Liang and Barsky; null where none is. */
 function clip([x0, y0], [x1, y1], box) {

@@ -214,6 +214,7 @@ function layoutOf(chart) {
   };
 }
 
+const pointsOf = trace => trace.x.map((x, i) => [x, trace.y[i]]);
 const corners = line => Array.from({ length: line.length / 2 }, (_, i) => [line[2 * i], line[2 * i + 1]]);
 const pathOf = (line, isClosed) => corners(line).map(([x, y], i) => `${i ? 'L' : 'M'}${x},${y}`).join('') + (isClosed ? 'Z' : '');
 
@@ -257,8 +258,11 @@ function labelShapes(chart) {
     guides: figure.guides.filter(guide => guide.text).map(guide => ({ lines: [guide.text], color: '--ink-2', x: xaxis.d2p(guide.x) })),
     note: figure.note.length > 0 ? { lines: figure.note, color: '--ink-2' } : null,
     disks: figure.disks.map(disk => ({ at: toPixel([disk.x, disk.y]), radius: disk.radius })),
-    lines: figure.paths.filter(path => path.fill === null).map(path => ({ isMain: path.repelsLabels, lines: path.lines.map(line => corners(line).map(toPixel)) })),
-    dots: traces.filter(trace => trace.mark !== 'None').flatMap(trace => trace.x.map((x, i) => toPixel([x, trace.y[i]]))),
+    lines: [
+      ...figure.paths.filter(path => path.fill === null).map(path => ({ isMain: path.repelsLabels, lines: path.lines.map(line => corners(line).map(toPixel)) })),
+      ...traces.filter(trace => trace.width > 0).map(trace => ({ isMain: true, lines: [pointsOf(trace).map(toPixel)] })),
+    ],
+    dots: traces.filter(trace => trace.mark !== 'None').flatMap(trace => pointsOf(trace).map(toPixel)),
   });
   return placed.map(({ x, y, w, h, lines, color, isBold }) => ({
     type: 'rect', xsizemode: 'pixel', ysizemode: 'pixel', xanchor: xaxis.p2d(x), yanchor: yaxis.p2d(y), x0: 0, x1: w, y0: 0, y1: -h, line: { width: 0 },

@@ -1,4 +1,3 @@
-using System.Collections.Immutable;
 using GlassPair.Optics.Color;
 using GlassPair.Optics.Requirements;
 using GlassPair.Optics.Spectrum;
@@ -57,7 +56,7 @@ internal static class FocalShiftFigure
             X = new PlotAxis("wavelength, nm", wavelengths[0], wavelengths[^1]),
             Y = new PlotAxis($"focal shift, {unit}", -half * scale, half * scale),
             Traces = [.. traces],
-            Paths = [zone, Line(chosen.Curve)],
+            Paths = [zone],
             Guides =
             [
                 new PlotGuide(band.ShortEnd.Nanometers, LineName(band.ShortEnd)),
@@ -74,9 +73,5 @@ internal static class FocalShiftFigure
 
         PlotTrace Curve(FocalShiftCurve curve) => new(
             [.. curve.Curve.Select(p => Math.Round(p.Wavelength.Nanometers, 2))], [.. curve.Curve.Select(p => Height(p.Shift))]);
-
-        // Not seen: it keeps the labels off the curve.
-        PlotPath Line(ImmutableArray<FocalShiftPoint> points) =>
-            new([[.. points.SelectMany(p => new[] { Math.Round(p.Wavelength.Nanometers, 2), Height(p.Shift) })]]) { Width = 0.0, RepelsLabels = true };
     }
 }
