@@ -9,6 +9,8 @@ namespace GlassPair.Web.Api;
 /// <summary>The answers of the API where it cannot do what was asked, in the form of RFC 9457.</summary>
 public static class Problems
 {
+    private const int MostUnknown = 10;
+
     /// <summary>400: fields are wrong; <c>errors</c> names each with what is allowed.</summary>
     public static ProblemHttpResult Faulty(FieldFaults faults) => TypedResults.Problem(
         title: "Some fields are wrong.",
@@ -23,13 +25,14 @@ public static class Problems
         statusCode: StatusCodes.Status404NotFound,
         extensions: [new("stocks", served.ToArray())]);
 
-    /// <summary>404: the stock has no such glasses; the closest names are listed.</summary>
+    /// <summary>404: the stock has no such glasses; the closest names are listed, for the first few.</summary>
     public static ProblemHttpResult UnknownGlasses(Stock stock, IReadOnlyList<string> ids)
     {
-        UnknownGlass[] unknown = [.. ids.Select(id => new UnknownGlass(StrictJson.Shown(id), ClosestGlasses.To(stock, id)))];
+        UnknownGlass[] unknown = [.. ids.Take(MostUnknown).Select(id => new UnknownGlass(StrictJson.Shown(id), ClosestGlasses.To(stock, id)))];
+        string more = ids.Count > unknown.Length ? FormattableString.Invariant($" {ids.Count - unknown.Length} more names are unknown.") : "";
         return TypedResults.Problem(
             title: "Unknown glass.",
-            detail: string.Join(" ", unknown.Select(u => $"The stock {stock.Id} has no glass {u.Glass}; the closest names are {string.Join(", ", u.Closest)}.")),
+            detail: string.Join(" ", unknown.Select(u => $"The stock {stock.Id} has no glass {u.Glass}; the closest names are {string.Join(", ", u.Closest)}.")) + more,
             statusCode: StatusCodes.Status404NotFound,
             extensions: [new("unknownGlasses", unknown)]);
     }

@@ -50,7 +50,6 @@ public sealed class CircuitPresence(TimeProvider clock) : CircuitHandler, IDispo
             wasStopped = _present.IsCancellationRequested;
             if (wasStopped)
             {
-                _present.Dispose();
                 _present = new CancellationTokenSource();
             }
         }
@@ -69,13 +68,14 @@ public sealed class CircuitPresence(TimeProvider clock) : CircuitHandler, IDispo
         lock (_lock)
         {
             _timer?.Dispose();
-            _present.Cancel();
-            _present.Dispose();
         }
+
+        Stop();
     }
 
     private void Stop()
     {
+        // A source is left to the garbage collector: the timer and the return of the user may use it at the same time.
         CancellationTokenSource present;
         lock (_lock)
         {

@@ -1,6 +1,7 @@
 using Microsoft.AspNetCore.Components.Server;
 using Microsoft.AspNetCore.Components.Server.Circuits;
 using Microsoft.AspNetCore.DataProtection;
+using Microsoft.AspNetCore.HttpsPolicy;
 using Microsoft.AspNetCore.SignalR;
 using Microsoft.Extensions.DependencyInjection.Extensions;
 
@@ -37,7 +38,9 @@ public static class HostingSetup
             options.SuppressXFrameOptionsHeader = true;
             options.Cookie.Name = "glasspair-form";
             options.Cookie.SameSite = SameSiteMode.Strict;
+            options.Cookie.SecurePolicy = CookieSecurePolicy.SameAsRequest;
         });
+        builder.Services.Configure<HstsOptions>(options => options.MaxAge = TimeSpan.FromDays(365));
         builder.Services.TryAddSingleton(TimeProvider.System);
         builder.Services.AddScoped<CircuitPresence>().AddScoped<CircuitHandler>(services => services.GetRequiredService<CircuitPresence>());
         builder.Services.Configure<CircuitOptions>(options =>
@@ -67,8 +70,9 @@ public static class HostingSetup
 
         if (SiteOf(app.Configuration).HttpsOnly)
         {
+            // Whoever watches over the process asks inside the proxy.
             app.UseHsts();
-            app.UseHttpsRedirection();
+            app.UseWhen(context => !Health.IsAskedBy(context.Request), pages => pages.UseHttpsRedirection());
         }
 
         app.UseStatusCodePagesWithReExecute("/not-found", createScopeForStatusCodePages: true);

@@ -139,6 +139,15 @@ public sealed class ShortlistTests(WebApplicationFactory<Program> factory) : Api
     }
 
     [Fact]
+    public async Task Shortlist_ThousandsOfUnknownGlasses_AreAnsweredQuicklyWithTheFirstFew()
+    {
+        string names = string.Join(',', Enumerable.Range(0, 2_000).Select(i => FormattableString.Invariant($"\"nobody/no-such-glass-with-a-name-as-long-as-names-may-be-{i}\"")));
+        JsonElement problem = await Post("/api/v1/shortlist", $$"""{"requirement":{{Requirement}},"exclude":[{{names}}]}""", HttpStatusCode.NotFound);
+        Assert.Equal(10, problem.GetProperty("unknownGlasses").GetArrayLength());
+        Assert.EndsWith("1990 more names are unknown.", problem.GetProperty("detail").GetString(), StringComparison.Ordinal);
+    }
+
+    [Fact]
     public async Task Shortlist_OwnSamples_AreUsedAsGiven()
     {
         string requirement = """{"focalLengthMm":100,"fNumber":5,"band":{"samplesNm":[450.123456789,550,650.5],"weights":[1,2,1]}}""";

@@ -87,6 +87,7 @@ public sealed class SiteTests(SiteFactory site) : IClassFixture<SiteFactory>
         HttpResponseMessage answer = await client.GetAsync(new Uri("/", UriKind.Relative));
         Assert.Equal(HttpStatusCode.TemporaryRedirect, answer.StatusCode);
         Assert.Equal("https", answer.Headers.Location!.Scheme);
+        Assert.Equal(HttpStatusCode.OK, (await client.GetAsync(new Uri("/healthz", UriKind.Relative))).StatusCode);
     }
 
     private static string NonceOf(HttpResponseMessage answer) =>
