@@ -52,18 +52,18 @@ export async function show(id, change) {
   await queue(chart, () => catchUp(chart));
 }
 
-/** Draws what has changed since the last drawing: the traces that did, then everything that hangs on no trace. */
+/** Draws what has changed since the last drawing: everything that hangs on no trace, then the traces that did. */
 async function catchUp(chart) {
   const { due } = chart;
   chart.due = null;
   if (!due) return; // drawn together with an earlier figure
   if (due.whole) return draw(chart);
+  await drawShapes(chart);
   if (due.traces.size > 0) {
     const traces = [...due.traces];
     await Plotly.animate(chart.plot, { data: traces.map(i => traceOf(chart, chart.traces[i])), traces },
       { mode: 'immediate', frame: { redraw: false, duration: 0 }, transition: { duration: 0 } });
   }
-  await drawShapes(chart);
 }
 
 const same = (a, b) => JSON.stringify(a) === JSON.stringify(b);

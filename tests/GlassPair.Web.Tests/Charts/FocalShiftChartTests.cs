@@ -68,6 +68,18 @@ public sealed class FocalShiftChartTests : ChartTestBase
     }
 
     [Fact]
+    public void Render_ShiftALittleSmaller_KeepsTheScale()
+    {
+        IRenderedComponent<FocalShiftChart> chart = Draw(Solve(Asked(250.0), "schott/N-BK7", "schott/F2"));
+        chart.Render(p => p.Add(c => c.Chosen, Solve(Asked(240.0), "schott/N-BK7", "schott/F2")));
+        Assert.Equal(Sent[0].Figure.Y, Sent[1].Figure.Y);
+        chart.Render(p => p.Add(c => c.Chosen, Solve(Asked(100.0, 4.0), "schott/N-BK7", "schott/F2")));
+        Assert.NotEqual(Sent[0].Figure.Y, Sent[2].Figure.Y);
+        chart.Render(p => p.Add(c => c.Chosen, Solve(Asked(260.0), "schott/N-BK7", "schott/F2")));
+        Assert.NotEqual(Sent[2].Figure.Y, Sent[3].Figure.Y);
+    }
+
+    [Fact]
     public void Render_SameSolutions_SendsNothing()
     {
         ThinSolution chosen = Solve(Asked(), "schott/N-BK7", "schott/F2");

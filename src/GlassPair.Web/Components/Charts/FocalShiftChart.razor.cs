@@ -10,7 +10,7 @@ public sealed partial class FocalShiftChart : ComponentBase
     private (ThinSolution? Chosen, ThinSolution? Pinned) _shown;
     private FocalShiftCurve _chosen = null!;
     private FocalShiftCurve? _pinned;
-    private PlotFigure _figure = null!;
+    private PlotFigure? _figure;
     private string _label = "";
 
     /// <summary>Gets or sets the combination shown.</summary>
@@ -33,7 +33,7 @@ public sealed partial class FocalShiftChart : ComponentBase
         _shown = (Chosen, Pinned);
         _chosen = FocalShiftCurve.Of(Chosen);
         _pinned = Pinned is null ? null : FocalShiftCurve.Of(Pinned);
-        _figure = FocalShiftFigure.Draw(_chosen, _pinned, Chosen.Requirement, Pinned is null ? "" : Name(Pinned));
+        _figure = FocalShiftFigure.Draw(_chosen, _pinned, Chosen.Requirement, Pinned is null ? "" : Name(Pinned), _figure);
         _label = Description();
     }
 

@@ -13,7 +13,12 @@ internal static class FocalShiftFigure
     private const double MostOfDepth = 4.0;
 
     /// <summary>Draws the curve of the chosen combination over the depth of focus, and the pinned one dashed.</summary>
-    public static PlotFigure Draw(FocalShiftCurve chosen, FocalShiftCurve? pinned, Requirement requirement, string pinnedName)
+    /// <param name="chosen">The chosen combination.</param>
+    /// <param name="pinned">The pinned one; null where none is.</param>
+    /// <param name="requirement">What the lens must do.</param>
+    /// <param name="pinnedName">What the pinned one is called.</param>
+    /// <param name="before">The figure shown so far, whose scale stays while it serves; null where there is none.</param>
+    public static PlotFigure Draw(FocalShiftCurve chosen, FocalShiftCurve? pinned, Requirement requirement, string pinnedName, PlotFigure? before)
     {
         Band band = requirement.Band;
         double shifts = chosen.Samples.Max(s => Math.Abs(s.Shift));
@@ -50,11 +55,12 @@ internal static class FocalShiftFigure
         PlotTrace[] traces = pinned is null
             ? [Curve(chosen) with { Width = 2.0 }, samples]
             : [Curve(pinned) with { Color = "--ink-2", Width = 1.3, Dash = "6px,3px" }, Curve(chosen) with { Width = 2.0 }, samples];
+        var scaleNow = new PlotAxis($"focal shift, {unit}", -half * scale, half * scale);
         FocalShiftPoint? seen = pinned?.Curve.Where(p => Math.Abs(p.Shift) < half * 0.9).Cast<FocalShiftPoint?>().FirstOrDefault();
         return new PlotFigure
         {
             X = new PlotAxis("wavelength, nm", wavelengths[0], wavelengths[^1]),
-            Y = new PlotAxis($"focal shift, {unit}", -half * scale, half * scale),
+            Y = before is not null && Serves(before.Y, scaleNow) ? before.Y : scaleNow,
             Traces = [.. traces],
             Paths = [zone],
             Guides =
@@ -66,10 +72,12 @@ internal static class FocalShiftFigure
             Labels = seen is { } at
                 ? [new PlotLabel(at.Wavelength.Nanometers, Height(at.Shift), pinnedName + ", pinned") { Color = "--ink-2" }]
                 : [],
-            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus, ±{FigureText.ShortLength(requirement.DepthOfFocus)} at {LineName(band.Design)}"],
+            Note = [depth <= half ? "green: depth of focus ±2λN² at each wavelength" : $"all inside the depth of focus, ±{FigureText.ShortLength(requirement.DepthOfFocus)} at {WavelengthText.LineAt(band.Design)?.Symbol ?? band.Design.ToString()}"],
         };
 
         static string LineName(Wavelength wavelength) => WavelengthText.LineAt(wavelength)?.Symbol ?? FigureText.Fixed(wavelength.Nanometers, 0);
+
+        static bool Serves(PlotAxis before, PlotAxis now) => before.Title == now.Title && now.To <= before.To && now.To >= 0.5 * before.To;
 
         PlotTrace Curve(FocalShiftCurve curve) => new(
             [.. curve.Curve.Select(p => Math.Round(p.Wavelength.Nanometers, 2))], [.. curve.Curve.Select(p => Height(p.Shift))]);
