@@ -69,7 +69,7 @@ internal sealed class GlassMapFigure
             Traces = [_all, _usable, _partners],
             Paths = [.. WedgePaths(wedge, whole), .. ChordPaths(map, drawn)],
             Disks = [.. PairDisks(map.Pinned, isThick: false), .. GlassDisk(map), .. PairDisks(map.Chosen, isThick: true)],
-            Labels = [.. PairLabels(map.Chosen, requirement, isChosen: true), .. GlassLabel(map), .. PairLabels(map.Pinned, requirement, isChosen: false)],
+            Labels = [.. PairLabels(map.Chosen, isChosen: true), .. GlassLabel(map), .. PairLabels(map.Pinned, isChosen: false)],
             Note = wedge is null ? [] : [$"shaded: where partners of {wedge.Glass.Glass.Name}", "stay within the limits of focus and power"],
         };
     }
@@ -160,7 +160,7 @@ internal sealed class GlassMapFigure
                 : new PlotDisk(x, y, isThick ? 5.0 : 3.0, "--pane", "--negative", isThick ? 2.5 : 1.8);
         });
 
-    private IEnumerable<PlotLabel> PairLabels(ThinSolution? solution, Requirement requirement, bool isChosen)
+    private IEnumerable<PlotLabel> PairLabels(ThinSolution? solution, bool isChosen)
     {
         if (solution is null)
         {
@@ -178,14 +178,13 @@ internal sealed class GlassMapFigure
         }
 
         if (_axes == MapAxes.PartialDispersion && solution.Elements.Length == 2
-            && Chord.SlopeOf(solution.Elements[0], solution.Elements[1]) is { } slope
-            && Chord.SecondarySpectrum(requirement, solution.Elements[0], solution.Elements[1]) is { } spectrum)
+            && Chord.SlopeOf(solution.Elements[0], solution.Elements[1]) is { } slope)
         {
             (double x, double y) = Place(solution.Elements[0]);
             (double toX, double toY) = Place(solution.Elements[1]);
             string title = "slope " + FigureText.PowerOfTen(slope, 2);
             yield return isChosen
-                ? new PlotLabel(x, y, title) { ToX = toX, ToY = toY, IsBold = true, Notes = ["secondary spectrum " + FigureText.ShortLength(spectrum)] }
+                ? new PlotLabel(x, y, title) { ToX = toX, ToY = toY, IsBold = true, Notes = ["secondary spectrum " + FigureText.ShortLength(solution.SecondarySpectrum)] }
                 : new PlotLabel(x, y, title) { ToX = toX, ToY = toY, Color = "--ink-2" };
         }
     }
