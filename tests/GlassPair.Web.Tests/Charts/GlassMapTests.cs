@@ -69,7 +69,7 @@ public sealed class GlassMapTests : ChartTestBase
         Assert.Contains("N-LAK10", labels);
         Assert.Contains(FormattableString.Invariant($"slope −{Math.Abs(slope) * 1e4:0.00}·10⁻⁴"), labels);
         double spectrum = Solve(Asked(), Positive, Negative).SecondarySpectrum;
-        Assert.Equal(slope, spectrum / 240.0, 0.01 * Math.Abs(slope)); // the balance differs from united ends by little
+        Assert.Equal(slope, spectrum / 240.0, 0.05 * Math.Abs(slope)); // the balance differs from united ends by a few percent
         Assert.Contains(FormattableString.Invariant($"secondary spectrum −{Math.Abs(spectrum) * 1e3:0}\u00A0µm"), labels);
     }
 
