@@ -72,3 +72,12 @@ document.addEventListener('click', event => {
   place.scrollIntoView();
   place.focus({ preventScroll: true });
 }, true);
+
+// A list that opens below the edge of its pane is brought into sight.
+new MutationObserver(changes => {
+  for (const { target } of changes) {
+    if (target.getAttribute('role') === 'combobox' && target.getAttribute('aria-expanded') === 'true') {
+      document.getElementById(target.getAttribute('aria-controls'))?.scrollIntoView({ block: 'nearest' });
+    }
+  }
+}).observe(document.body, { subtree: true, attributeFilter: ['aria-expanded'] });

@@ -124,14 +124,13 @@ public sealed class FormReading
             _problems[NumberField.ShortEnd] = Text($"The short end, {shortEnd:0.####} nm, must lie below the design wavelength, {design:0.####} nm.");
         }
 
-        if (longEnd - shortEnd < RequirementReading.NarrowestBand)
-        {
-            _problems[NumberField.LongEnd] = Text($"The band must be at least {RequirementReading.NarrowestBand:0.##} nm wide.");
-        }
-
         if (!(design < longEnd))
         {
             _problems[NumberField.LongEnd] = Text($"The long end, {longEnd:0.####} nm, must lie above the design wavelength, {design:0.####} nm.");
+        }
+        else if (shortEnd < design && longEnd - shortEnd < RequirementReading.NarrowestBand)
+        {
+            _problems[NumberField.LongEnd] = Text($"The band must be at least {RequirementReading.NarrowestBand:0.##} nm wide.");
         }
     }
 

@@ -56,9 +56,9 @@ public static class PairFindings
         string limit = FNumber(pair.ColorLimitedFNumber);
         return pair.Verdict switch
         {
-            Verdict.Holds => new Finding(Verdict.Holds, "Color holds", $"within ±{half} µm of one focus where {n} allows ±{depth} µm; would hold down to {limit}"),
-            Verdict.Tight => new Finding(Verdict.Tight, "Color is tight", $"within ±{half} µm of one focus where {n} allows ±{depth} µm; the limit is {limit}"),
-            _ => new Finding(Verdict.Exceeds, "Color exceeds", $"±{half} µm about one focus where {n} allows ±{depth} µm; holds from {limit} on"),
+            Verdict.Holds => new Finding(Verdict.Holds, "Color holds", $"within ±{half} µm of one focus, {n} allows ±{depth} µm; holds down to {limit}"),
+            Verdict.Tight => new Finding(Verdict.Tight, "Color is tight", $"within ±{half} µm of one focus, {n} allows ±{depth} µm; the limit is {limit}"),
+            _ => new Finding(Verdict.Exceeds, "Color exceeds", $"±{half} µm about one focus, {n} allows ±{depth} µm; holds from {limit} on"),
         };
     }
 

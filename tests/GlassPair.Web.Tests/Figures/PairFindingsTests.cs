@@ -23,7 +23,7 @@ public sealed class PairFindingsTests
         Finding color = PairFindings.Of(Pair("?f=240&n=20", _classic))[0];
 
         Assert.Equal(Verdict.Holds, color.Verdict);
-        Assert.Contains("where f/20 allows ±", color.Sentence, StringComparison.Ordinal);
+        Assert.Contains("f/20 allows ±", color.Sentence, StringComparison.Ordinal);
     }
 
     [Fact]

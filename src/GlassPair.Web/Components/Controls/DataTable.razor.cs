@@ -12,6 +12,7 @@ public sealed partial class DataTable<TItem> : ComponentBase
     private List<Line> _lines = [];
     private List<Line> _rest = [];
     private object? _tabStop;
+    private bool _isChanged;
 
     /// <summary>Gets or sets what the table shows, for those who cannot see it.</summary>
     [Parameter, EditorRequired] public required string Label { get; set; }
@@ -64,9 +65,16 @@ public sealed partial class DataTable<TItem> : ComponentBase
     /// <summary>Called with the row pointed at; default when none is any more.</summary>
     [Parameter] public EventCallback<TItem?> PointedAt { get; set; }
 
+    /// <summary>Nothing is drawn anew but for new parameters: a pointer that passes over rows costs nothing.</summary>
+    protected override bool ShouldRender() => _isChanged;
+
+    /// <inheritdoc/>
+    protected override void OnAfterRender(bool firstRender) => _isChanged = false;
+
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        _isChanged = true;
         _lines = new List<Line>(Items.Count + Headings.Count);
         for (int i = 0; i < Items.Count; i++)
         {

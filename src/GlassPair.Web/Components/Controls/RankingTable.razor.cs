@@ -18,6 +18,8 @@ public sealed partial class RankingTable : ComponentBase
     private static readonly ImmutableArray<int> _takes = [100, 500, 2_000, ShortlistRequest.MaxTake];
     private static readonly ImmutableArray<int> _each = [1, 2, 3, 5, 10];
 
+    private bool _isChanged;
+
     /// <summary>Gets or sets what the page shows.</summary>
     [Parameter, EditorRequired] public required WorkbenchState State { get; set; }
 
@@ -35,6 +37,9 @@ public sealed partial class RankingTable : ComponentBase
 
     /// <summary>Gets or sets the pair kept on top for comparison.</summary>
     [Parameter] public RankedPair? Pinned { get; set; }
+
+    /// <summary>Gets or sets what the answer shown was made for, as a sentence; null where it is the answer to what was asked.</summary>
+    [Parameter] public string? Staleness { get; set; }
 
     /// <summary>Called with the new state at each choice.</summary>
     [Parameter] public EventCallback<WorkbenchState> Picked { get; set; }
@@ -87,9 +92,16 @@ public sealed partial class RankingTable : ComponentBase
         [var first, .., var last] => $"{first} to {last}",
     };
 
+    /// <summary>Nothing is drawn anew but for new parameters.</summary>
+    protected override bool ShouldRender() => _isChanged;
+
+    /// <inheritdoc/>
+    protected override void OnAfterRender(bool firstRender) => _isChanged = false;
+
     /// <inheritdoc/>
     protected override void OnParametersSet()
     {
+        _isChanged = true;
         Shown = State.Columns is { } keys ? [.. RankingColumn.All.Where(c => keys.Contains(c.Key))] : RankingColumn.Usual;
         Columns =
         [

@@ -3,6 +3,7 @@ using System.Globalization;
 using GlassPair.Catalogue;
 using GlassPair.Optics.Glasses;
 using GlassPair.Optics.Rankings;
+using GlassPair.Optics.Requirements;
 using GlassPair.Web.Addresses;
 using GlassPair.Web.Figures;
 using GlassPair.Web.Hosting;
@@ -18,6 +19,7 @@ public sealed partial class Workbench : ComponentBase
 {
     private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(25);
     private static readonly TimeSpan _patience = TimeSpan.FromMilliseconds(300);
+    private static readonly TimeSpan _rest = TimeSpan.FromMilliseconds(80);
     private static readonly TimeSpan _addressPause = TimeSpan.FromMilliseconds(400);
 
     private WorkbenchState _state = WorkbenchState.Empty;
@@ -39,6 +41,7 @@ public sealed partial class Workbench : ComponentBase
     private string _shownQuery = "";
     private CancellationTokenSource _work = new();
     private CancellationTokenSource _addressWork = new();
+    private CancellationTokenSource _pointing = new();
 
     [Inject] private StockLibrary Library { get; set; } = null!;
 
@@ -58,17 +61,28 @@ public sealed partial class Workbench : ComponentBase
 
     private Glass? ChosenGlass => _state.ChosenGlass is { } id && _stock.TryFind(id, out Glass? glass) ? glass : null;
 
-    private string AskedFor => _reading.Request is { } request ? RequirementText.NameOf(request.Requirement) : "No requirement yet";
+    /// <summary>The requirement as typed; while it cannot be read, that of the answer shown.</summary>
+    private Requirement? Asked => (_reading.Request ?? _answer?.Shortlist.Request)?.Requirement;
 
-    private string AskedDetails => _reading.Request is { } request ? RequirementText.DetailsOf(request.Requirement) : "";
+    private string AskedFor => Asked is { } asked ? RequirementText.NameOf(asked) : "No requirement yet";
 
-    private string Title => (_reading.Request is null ? "" : $"{AskedFor}, {RequirementText.Of(_reading.Request.Requirement.Band)}")
+    private string AskedDetails => Asked is { } asked ? RequirementText.DetailsOf(asked) : "";
+
+    private string Title => (Asked is null ? "" : $"{AskedFor}, {RequirementText.Of(Asked.Band)}")
         + (_chosen is null ? "" : $": {_chosen.Positive.Glass.Name} + {_chosen.Negative.Glass.Name}") is { Length: > 0 } text ? text + " · GlassPair" : "GlassPair";
 
     private string Description => _answer is null || _chosen is null
         ? "Which glasses bring a band of wavelengths to one focus well enough for an aperture, out of everything on sale."
         : $"{AskedFor} {AskedDetails}. {_chosen.Positive.Glass.Name} ({_chosen.Positive.Glass.Maker}) and {_chosen.Negative.Glass.Name} ({_chosen.Negative.Glass.Maker}): {PairFindings.Of(_chosen)[0].Title}, {PairFindings.Of(_chosen)[0].Sentence}. "
             + $"{FigureText.Count(_answer.Shortlist.CombinationsHolding)} of {FigureText.Count(_answer.Shortlist.CombinationsFeasible)} pairs hold.";
+
+    /// <summary>Called for each row that the pointer enters: without a receiver, so that nothing is drawn until it rests.</summary>
+    private EventCallback<RankedPair?> RowPointedAt => new(null, (RankedPair? pair) => PointAtAsync(pair?.Candidate));
+
+    /// <summary>What the answer shown was made for, where that is no longer what the form says.</summary>
+    private string? Staleness => !_stale || _answer is null ? null
+        : $"Shown for {RequirementText.Of(_answer.Shortlist.Request.Requirement)}"
+            + (_reading.Request is { } request ? $"; {RequirementText.Of(request.Requirement)} is being computed." : "; correct what is marked to go on.");
 
     private string Waiting => _failure
         ?? (!_reading.IsStarted ? "Give a focal length and an f-number: the pairs appear as you type."
@@ -130,6 +144,8 @@ public sealed partial class Workbench : ComponentBase
         _work.Dispose();
         _addressWork.Cancel();
         _addressWork.Dispose();
+        _pointing.Cancel();
+        _pointing.Dispose();
     }
 
     /// <summary>The page takes no parameters: when the router shows it again after its own change of address, there is nothing to draw.</summary>
@@ -204,10 +220,16 @@ public sealed partial class Workbench : ComponentBase
 
     private Task PickGlassAsync(Glass glass) => PickAsync(_state with { ChosenGlass = _state.ChosenGlass == glass.Id ? null : glass.Id });
 
-    private Task PointAtAsync(Candidate? candidate)
+    /// <summary>Thickens the chord of a row where the pointer rests; rows that it only passes over cost nothing.</summary>
+    private async Task PointAtAsync(Candidate? candidate)
     {
-        _pointedAt = candidate;
-        return Task.CompletedTask;
+        CancellationToken cancellation = Restart(ref _pointing);
+        await Task.Delay(_rest, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
+        if (!cancellation.IsCancellationRequested && !ReferenceEquals(_pointedAt, candidate))
+        {
+            _pointedAt = candidate;
+            StateHasChanged();
+        }
     }
 
     private void Set(WorkbenchState next)
