@@ -219,6 +219,32 @@ public sealed class WorkbenchTests : BunitContext
         Assert.Contains("no index over the whole band", page.Find(".reasons").TextContent, StringComparison.Ordinal);
     }
 
+    [Fact]
+    public void FaultyPanel_LeavesTheOthersWorking()
+    {
+        ComponentFactories.AddStub<GlassMap>((CapturedParameterView<GlassMap> _) => (RenderFragment)(_ => throw new InvalidOperationException("A fault of ours.")));
+
+        var page = Open(Small);
+
+        Assert.Contains("The map met an error that is ours", page.Find(".map").TextContent, StringComparison.Ordinal);
+        Assert.NotEmpty(page.FindAll(".rank tbody button"));
+        Assert.NotEmpty(page.FindAll(".pair h2"));
+    }
+
+    [Fact]
+    public async Task Typing_BackToWhatWasShown_IsNotOvertakenByWhatWasTypedBetween()
+    {
+        var page = Open(Small);
+
+        await page.InvokeAsync(() => page.Find("#field-f").Input("24"));
+        await page.InvokeAsync(() => page.Find("#field-f").Input("240"));
+        await Task.Delay(1_500);
+
+        Assert.StartsWith("240 mm f/6", Title(page), StringComparison.Ordinal);
+        Assert.Equal("240", page.Find("#field-f").GetAttribute("value"));
+        Assert.Empty(page.FindAll(".bench.stale"));
+    }
+
     private static WorkbenchAnswer Ranked(string more) => Controls.Ranked.Answer(Small + more);
 
     private static string Title(IRenderedComponent<Workbench> page)

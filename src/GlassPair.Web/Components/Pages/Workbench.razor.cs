@@ -290,10 +290,13 @@ public sealed partial class Workbench : ComponentBase
             }
 
             WorkbenchAnswer answer = await work;
+
+            // It may have been ready before it could be stopped: a newer one may be shown already.
+            cancellation.ThrowIfCancellationRequested();
             Show(answer);
             await CountCostsAsync(answer, cancellation);
         }
-        catch (OperationCanceledException)
+        catch (Exception e) when (e is OperationCanceledException or ServerBusyException && cancellation.IsCancellationRequested)
         {
             // A newer requirement took over, or the page was closed.
         }

@@ -6,13 +6,14 @@ using GlassPair.Web.Work;
 
 namespace GlassPair.Web.Components.Pages;
 
-/// <summary>Answers states of the working page, and keeps the last few: a prerendered page, Back and a colleague's link find theirs at once.</summary>
+/// <summary>Answers states of the working page, and keeps the last few, 12,000 pairs in all: a prerendered page, Back and a colleague's link find theirs at once.</summary>
 /// <remarks>One instance for the whole process; safe to use from any thread.</remarks>
 public sealed class WorkbenchAnswers(ShortlistService shortlists)
 {
-    private const int Most = 24;
+    private const int MostPairs = 12_000;
     private readonly ConcurrentDictionary<string, WorkbenchAnswer> _kept = new(StringComparer.Ordinal);
     private readonly ConcurrentQueue<string> _order = new();
+    private int _pairs;
 
     /// <summary>Finds an answer that is still kept.</summary>
     public WorkbenchAnswer? Find(WorkbenchState state, Stock stock) => _kept.GetValueOrDefault(KeyOf(state, stock));
@@ -35,9 +36,13 @@ public sealed class WorkbenchAnswers(ShortlistService shortlists)
         if (_kept.TryAdd(key, answer))
         {
             _order.Enqueue(key);
-            while (_order.Count > Most && _order.TryDequeue(out string? oldest))
+            Interlocked.Add(ref _pairs, answer.Pairs.Length);
+            while (Volatile.Read(ref _pairs) > MostPairs && _order.TryDequeue(out string? oldest))
             {
-                _kept.TryRemove(oldest, out _);
+                if (_kept.TryRemove(oldest, out WorkbenchAnswer? removed))
+                {
+                    Interlocked.Add(ref _pairs, -removed.Pairs.Length);
+                }
             }
         }
 
