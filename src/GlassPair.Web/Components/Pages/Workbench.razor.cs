@@ -17,7 +17,7 @@ namespace GlassPair.Web.Components.Pages;
 /// <summary>The working page: requirement, glass map, chosen pair, ranking; one selection, and all of it in the address.</summary>
 public sealed partial class Workbench : ComponentBase
 {
-    private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(25);
+    private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(15);
     private static readonly TimeSpan _patience = TimeSpan.FromMilliseconds(300);
     private static readonly TimeSpan _rest = TimeSpan.FromMilliseconds(80);
     private static readonly TimeSpan _addressPause = TimeSpan.FromMilliseconds(400);
