@@ -17,6 +17,7 @@ public sealed class FitPageTests : GlassPagesTestBase
     {
         IRenderedComponent<FitPage> page = Open("");
         Button(page, "Example (invented)").Click();
+        Settled(page);
         Assert.Contains("invented", page.Find("textarea").GetAttribute("value"), StringComparison.Ordinal);
         Assert.Equal("worst line", page.FindAll(".lines tbody tr").Single(r => r.TextContent.Contains("852.11", StringComparison.Ordinal)).QuerySelector(".said")!.TextContent);
         Assert.StartsWith("fit?v=1&rows=", Address, StringComparison.Ordinal);
@@ -28,10 +29,12 @@ public sealed class FitPageTests : GlassPagesTestBase
         IRenderedComponent<FitPage> page = Open(FitAddress.Write(FitExample.State));
         string before = page.Find(".reading b").TextContent;
         page.Find("input[aria-label='Use the index at 852.11 nm']").Change(false);
+        Settled(page);
         Assert.NotEqual(before, page.Find(".reading b").TextContent);
         Assert.Contains("1 line left out by you; with all of them the RMS is " + before, page.Find(".reading").TextContent, StringComparison.Ordinal);
         Assert.Contains("&out=852.11", Address, StringComparison.Ordinal);
         Button(page, "Use all lines").Click();
+        Settled(page);
         Assert.Equal(before, page.Find(".reading b").TextContent);
     }
 
@@ -57,7 +60,8 @@ public sealed class FitPageTests : GlassPagesTestBase
     {
         IRenderedComponent<FitPage> page = Open(FitAddress.Write(FitExample.State));
         page.Find("#fit-form").Change("Sellmeier");
-        page.Find("#fit-terms").Change("2");
+        Settled(page).Find("#fit-terms").Change("2");
+        Settled(page);
         Assert.Contains("Sellmeier formula of 2 terms", page.Find(".reading").TextContent, StringComparison.Ordinal);
         Assert.EndsWith("&form=sellmeier&terms=2&name=invented/example", Address, StringComparison.Ordinal);
         page.Find("#fit-form").Change("");
@@ -73,6 +77,7 @@ public sealed class FitPageTests : GlassPagesTestBase
         IRenderedComponent<FitPage> page = Open(FitAddress.Write(FitExample.State));
         string before = page.Find(".reading").TextContent;
         page.Find(field).Change(value);
+        Settled(page);
         Assert.Equal(before, page.Find(".reading").TextContent);
     }
 
@@ -126,6 +131,12 @@ public sealed class FitPageTests : GlassPagesTestBase
     private IRenderedComponent<FitPage> Open(string query)
     {
         Navigation.NavigateTo("fit" + query);
-        return Render<FitPage>();
+        return Settled(Render<FitPage>());
+    }
+
+    private static IRenderedComponent<FitPage> Settled(IRenderedComponent<FitPage> page)
+    {
+        page.WaitForState(() => !page.Find(".fit").HasAttribute("aria-busy"));
+        return page;
     }
 }

@@ -55,7 +55,7 @@ public sealed class GlassPageTests : GlassPagesTestBase
         string link = page.FindAll("a").Single(a => a.TextContent == "Open the table in the fit").GetAttribute("href")!;
         Navigation.NavigateTo(link);
         IRenderedComponent<FitPage> fit = Render<FitPage>();
-        Assert.Equal(31, fit.FindAll(".lines tbody tr").Count);
+        fit.WaitForAssertion(() => Assert.Equal(31, fit.FindAll(".lines tbody tr").Count));
         Assert.Contains("1 line left out by you", fit.Find(".reading").TextContent, StringComparison.Ordinal);
     }
 

@@ -5,6 +5,7 @@ using GlassPair.Optics.Glasses;
 using GlassPair.Web.Addresses;
 using GlassPair.Web.Components.Glasses;
 using GlassPair.Web.Figures;
+using GlassPair.Web.Work;
 using Microsoft.AspNetCore.Components;
 using Microsoft.AspNetCore.Components.Forms;
 using Microsoft.AspNetCore.Components.Routing;
@@ -36,7 +37,12 @@ public sealed partial class FitPage : ComponentBase
     private string? _fileProblem;
     private string _shownQuery = "";
     private ErrorBoundary? _chartBoundary;
+    private string? _failure;
+    private bool _isWorking;
     private CancellationTokenSource _typing = new();
+    private CancellationTokenSource _work = new();
+
+    [Inject] private WorkGate Gate { get; set; } = null!;
 
     [Inject] private LastRequirement Last { get; set; } = null!;
 
@@ -59,13 +65,15 @@ public sealed partial class FitPage : ComponentBase
         Navigation.LocationChanged -= OnLocationChanged;
         _typing.Cancel();
         _typing.Dispose();
+        _work.Cancel();
+        _work.Dispose();
     }
 
     /// <inheritdoc/>
-    protected override void OnInitialized()
+    protected override Task OnInitializedAsync()
     {
         Navigation.LocationChanged += OnLocationChanged;
-        ReadAddress();
+        return ReadAddressAsync();
     }
 
     private static string Counted(int count, string noun) => count == 1 ? $"1 {noun}" : $"{FigureText.Count(count)} {noun}s";
@@ -84,24 +92,42 @@ public sealed partial class FitPage : ComponentBase
         : _answer.Made is not null && line.Residual is null ? "left out by you; outside the range fitted, where the formula says nothing"
         : "left out by you";
 
-    private void ReadAddress()
+    private Task ReadAddressAsync()
     {
         _shownQuery = new Uri(Navigation.Uri).Query;
         (_state, _notices) = FitAddress.Read(_shownQuery);
-        Answer();
+        return AnswerAsync();
     }
 
-    private void Answer()
+    /// <summary>Fits off the page's own thread, so that a long table does not hold up the typing; the answer before it stays until then.</summary>
+    private async Task AnswerAsync()
     {
-        _answer = FitAnswer.Of(_state);
-        _chartBoundary?.Recover();
+        (FitState asked, CancellationToken cancellation) = (_state, Restart(ref _work));
+        _isWorking = true;
+        try
+        {
+            FitAnswer answer = await Gate.RunAsync(_ => FitAnswer.Of(asked), cancellation);
+            if (!cancellation.IsCancellationRequested)
+            {
+                (_answer, _failure, _isWorking) = (answer, null, false);
+                _chartBoundary?.Recover();
+            }
+        }
+        catch (OperationCanceledException)
+        {
+            // A newer table took over, or the page was closed.
+        }
+        catch (ServerBusyException busy)
+        {
+            (_failure, _isWorking) = (busy.Message, false);
+        }
     }
 
-    private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(() =>
+    private void OnLocationChanged(object? sender, LocationChangedEventArgs e) => _ = InvokeAsync(async () =>
     {
         if (new Uri(e.Location) is { AbsolutePath: var path, Query: var query } && query != _shownQuery && path == new Uri(new Uri(Navigation.BaseUri), "fit").AbsolutePath)
         {
-            ReadAddress();
+            await ReadAddressAsync();
             StateHasChanged();
         }
     });
@@ -110,10 +136,10 @@ public sealed partial class FitPage : ComponentBase
     private async Task TypeAsync(FitState next)
     {
         (_state, _fileProblem) = (next, null);
-        CancellationToken cancellation = await RestartAsync();
+        CancellationToken cancellation = Restart(ref _typing);
         if (await PauseAsync(_pause, cancellation))
         {
-            Answer();
+            await AnswerAsync();
             StateHasChanged();
         }
 
@@ -126,9 +152,9 @@ public sealed partial class FitPage : ComponentBase
     private async Task PickAsync(FitState next)
     {
         (_state, _fileProblem) = (next, null);
-        await RestartAsync();
-        Answer();
+        Restart(ref _typing);
         Navigate(replace: false);
+        await AnswerAsync();
     }
 
     private Task TermsAsync(ChangeEventArgs e) =>
@@ -164,12 +190,12 @@ public sealed partial class FitPage : ComponentBase
         }
     }
 
-    private async Task<CancellationToken> RestartAsync()
+    private static CancellationToken Restart(ref CancellationTokenSource source)
     {
-        await _typing.CancelAsync();
-        _typing.Dispose();
-        _typing = new CancellationTokenSource();
-        return _typing.Token;
+        source.Cancel();
+        source.Dispose();
+        source = new CancellationTokenSource();
+        return source.Token;
     }
 
     private static async Task<bool> PauseAsync(TimeSpan pause, CancellationToken cancellation)
