@@ -56,6 +56,7 @@ public sealed class MeasuredTableTests
         { "1.5168 587.6", "index stands first" },
         { "587.6 1.5168 1.5", "3 fields" },
         { "\"587.6;1.5168", "not closed" },
+        { "\"587.6\"x;1.5168", "not a number" },
         { "587.6 1.51\u000768", "cannot be seen" },
         { "587.6 1.5168\n0.4861 1.52238\n656.3 1.51432", "looks like µm" },
         { "0.5876 1.5168\n486.1 1.52238\n0.6563 1.51432", "looks like nm" },

@@ -45,50 +45,30 @@ internal readonly record struct NumberPair(double First, double Second, string? 
     public static List<Field>? TrySplit(string line, FieldSeparator? separator)
     {
         List<Field> fields = [];
-        int at = 0;
-        while (at <= line.Length)
+        for (int at = 0; at <= line.Length;)
         {
-            while (at < line.Length && line[at] is ' ' or '\u00A0' or '\t' && !Separates(line[at], separator))
+            while (at < line.Length && IsBlank(line[at]) && (separator == FieldSeparator.Space || !Separates(line[at], separator)))
             {
                 at++;
             }
 
-            if (separator == FieldSeparator.Space)
+            bool isQuoted = at < line.Length && line[at] == Quote;
+            int close = isQuoted ? line.IndexOf(Quote, at + 1) : at - 1;
+            if (isQuoted && close < 0)
             {
-                while (at < line.Length && Separates(line[at], separator))
-                {
-                    at++;
-                }
+                return null;
             }
 
-            int start = at;
-            bool quoted = at < line.Length && line[at] == Quote;
-            if (quoted)
+            int end = close + 1;
+            while (end < line.Length && !Separates(line[end], separator))
             {
-                int close = line.IndexOf(Quote, at + 1);
-                if (close < 0)
-                {
-                    return null;
-                }
-
-                fields.Add(new Field(line[(at + 1)..close].Trim(), IsQuoted: true));
-                at = close + 1;
-                while (at < line.Length && !Separates(line[at], separator))
-                {
-                    at++;
-                }
-            }
-            else
-            {
-                while (at < line.Length && !Separates(line[at], separator))
-                {
-                    at++;
-                }
-
-                fields.Add(new Field(line[start..at].Trim(), IsQuoted: false));
+                end++;
             }
 
-            at++;
+            // What stands behind a closing quotation mark makes the whole no number.
+            bool isClean = isQuoted && line.AsSpan(close + 1, end - close - 1).IsWhiteSpace();
+            fields.Add(new Field((isClean ? line[(at + 1)..close] : line[at..end]).Trim(), isClean));
+            at = end + 1;
         }
 
         while (fields is [.., { Text.Length: 0, IsQuoted: false }])
@@ -105,13 +85,15 @@ internal readonly record struct NumberPair(double First, double Second, string? 
 
     private static bool IsOneComma(string text) => text.Count(c => c == ',') == 1 && !text.Contains('.', StringComparison.Ordinal);
 
+    private static bool IsBlank(char c) => c is ' ' or '\t' or '\u00A0';
+
     private static bool Separates(char c, FieldSeparator? separator) => separator switch
     {
         FieldSeparator.Tab => c == '\t',
         FieldSeparator.Semicolon => c == ';',
         FieldSeparator.Bar => c == '|',
         FieldSeparator.Comma => c == ',',
-        _ => c is ' ' or '\t' or '\u00A0',
+        _ => IsBlank(c),
     };
 
     /// <summary>Reads a number; the problem as a sentence where there is none.</summary>

@@ -31,6 +31,8 @@ public sealed partial class FitPage : ComponentBase
     private static readonly (DispersionForm?, string)[] _forms =
         [(null, "the best"), (DispersionForm.Sellmeier, "Sellmeier"), (DispersionForm.PowerSeries, "power series")];
 
+    private readonly Latest _typing = new();
+    private readonly Latest _work = new();
     private FitState _state = FitState.Empty;
     private FitAnswer _answer = FitAnswer.Of(FitState.Empty);
     private ImmutableArray<string> _notices = [];
@@ -39,8 +41,6 @@ public sealed partial class FitPage : ComponentBase
     private ErrorBoundary? _chartBoundary;
     private string? _failure;
     private bool _isWorking;
-    private CancellationTokenSource _typing = new();
-    private CancellationTokenSource _work = new();
 
     [Inject] private WorkGate Gate { get; set; } = null!;
 
@@ -63,9 +63,7 @@ public sealed partial class FitPage : ComponentBase
     public void Dispose()
     {
         Navigation.LocationChanged -= OnLocationChanged;
-        _typing.Cancel();
         _typing.Dispose();
-        _work.Cancel();
         _work.Dispose();
     }
 
@@ -102,7 +100,7 @@ public sealed partial class FitPage : ComponentBase
     /// <summary>Fits off the page's own thread, so that a long table does not hold up the typing; the answer before it stays until then.</summary>
     private async Task AnswerAsync()
     {
-        (FitState asked, CancellationToken cancellation) = (_state, Restart(ref _work));
+        (FitState asked, CancellationToken cancellation) = (_state, _work.Next());
         _isWorking = true;
         try
         {
@@ -136,14 +134,14 @@ public sealed partial class FitPage : ComponentBase
     private async Task TypeAsync(FitState next)
     {
         (_state, _fileProblem) = (next, null);
-        CancellationToken cancellation = Restart(ref _typing);
-        if (await PauseAsync(_pause, cancellation))
+        CancellationToken cancellation = _typing.Next();
+        if (await Latest.PauseAsync(_pause, cancellation))
         {
             await AnswerAsync();
             StateHasChanged();
         }
 
-        if (await PauseAsync(_addressPause, cancellation))
+        if (await Latest.PauseAsync(_addressPause, cancellation))
         {
             Navigate(replace: true);
         }
@@ -152,7 +150,7 @@ public sealed partial class FitPage : ComponentBase
     private async Task PickAsync(FitState next)
     {
         (_state, _fileProblem) = (next, null);
-        Restart(ref _typing);
+        _typing.Next();
         Navigate(replace: false);
         await AnswerAsync();
     }
@@ -188,20 +186,6 @@ public sealed partial class FitPage : ComponentBase
         {
             _fileProblem = "The file could not be read to its end: open it again.";
         }
-    }
-
-    private static CancellationToken Restart(ref CancellationTokenSource source)
-    {
-        source.Cancel();
-        source.Dispose();
-        source = new CancellationTokenSource();
-        return source.Token;
-    }
-
-    private static async Task<bool> PauseAsync(TimeSpan pause, CancellationToken cancellation)
-    {
-        await Task.Delay(pause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
-        return !cancellation.IsCancellationRequested;
     }
 
     private void Navigate(bool replace)

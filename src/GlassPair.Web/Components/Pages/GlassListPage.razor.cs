@@ -16,6 +16,7 @@ public sealed partial class GlassListPage : ComponentBase
 {
     private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(300);
 
+    private readonly Latest _typing = new();
     private GlassListState _state = GlassListState.Empty;
     private ImmutableArray<string> _notices = [];
     private IReadOnlyList<GlassFigures> _all = [];
@@ -23,7 +24,6 @@ public sealed partial class GlassListPage : ComponentBase
     private IReadOnlyList<GlassFigures> _mapped = [];
     private GlassFigures? _chosen;
     private string _shownQuery = "";
-    private CancellationTokenSource _typing = new();
 
     [Inject] private StockLibrary Library { get; set; } = null!;
 
@@ -65,7 +65,6 @@ public sealed partial class GlassListPage : ComponentBase
     public void Dispose()
     {
         Navigation.LocationChanged -= OnLocationChanged;
-        _typing.Cancel();
         _typing.Dispose();
     }
 
@@ -127,12 +126,7 @@ public sealed partial class GlassListPage : ComponentBase
         string search = text ?? "";
         _state = _state with { Search = search.Length > GlassListState.MaxSearchLength ? search[..GlassListState.MaxSearchLength] : search };
         Show();
-        await _typing.CancelAsync();
-        _typing.Dispose();
-        _typing = new CancellationTokenSource();
-        CancellationToken cancellation = _typing.Token;
-        await Task.Delay(_pause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
-        if (!cancellation.IsCancellationRequested)
+        if (await _typing.PauseAsync(_pause))
         {
             _mapped = _shown;
             Navigate(replace: true);

@@ -19,6 +19,7 @@ public sealed partial class GlassPage : ComponentBase
 {
     private static readonly TimeSpan _pause = TimeSpan.FromMilliseconds(300);
 
+    private readonly Latest _typing = new();
     private GlassPageState _state = GlassPageState.Empty;
     private GlassPageReading _reading = GlassPageReading.Of(GlassPageState.Empty);
     private double _thickness = 10.0;
@@ -28,7 +29,6 @@ public sealed partial class GlassPage : ComponentBase
     private GlassFigures? _figures;
     private IndexTable? _table;
     private string _shown = "";
-    private CancellationTokenSource _typing = new();
 
     /// <summary>Gets or sets the maker, as the address says.</summary>
     [Parameter] public string Maker { get; set; } = "";
@@ -112,7 +112,6 @@ public sealed partial class GlassPage : ComponentBase
     public void Dispose()
     {
         Navigation.LocationChanged -= OnLocationChanged;
-        _typing.Cancel();
         _typing.Dispose();
     }
 
@@ -189,13 +188,9 @@ public sealed partial class GlassPage : ComponentBase
     {
         _state = next;
         Read();
-        await _typing.CancelAsync();
-        _typing.Dispose();
-        _typing = new CancellationTokenSource();
-        CancellationToken cancellation = _typing.Token;
-        await Task.Delay(_pause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
+        bool isLatest = await _typing.PauseAsync(_pause);
         string path = GlassPageAddress.Of(Glass, _state);
-        if (!cancellation.IsCancellationRequested && path != _shown)
+        if (isLatest && path != _shown)
         {
             _shown = path;
             Navigation.NavigateTo(path, new NavigationOptions { ReplaceHistoryEntry = true });

@@ -1,9 +1,9 @@
 using System.Collections.Immutable;
 using System.Globalization;
 using GlassPair.Optics.Glasses;
-using GlassPair.Web.Components.Glasses;
+using GlassPair.Web.Addresses;
 
-namespace GlassPair.Web.Addresses;
+namespace GlassPair.Web.Components.Glasses;
 
 /// <summary>Writes the address of a glass's own page, and reads its query back.</summary>
 /// <remarks>Format 1: <c>glasses/schott/N-BK7?v=1&amp;thickness=25&amp;short=g&amp;design=e&amp;long=C&amp;stock=4f1c09ab12cd</c>. Defaults are left out.</remarks>
@@ -13,7 +13,9 @@ public static class GlassPageAddress
     public const int Format = 1;
 
     /// <summary>Gets the address, relative to the site.</summary>
-    public static string Of(Glass glass) => $"glasses/{Uri.EscapeDataString(glass.Maker)}/{Uri.EscapeDataString(glass.Name)}";
+    /// <param name="glass">The glass.</param>
+    /// <param name="stockId">The id of the stock that is asked for; null stands for today's.</param>
+    public static string Of(Glass glass, string? stockId = null) => Of(glass, GlassPageState.Empty with { StockId = stockId });
 
     /// <summary>Gets the address with what the page is asked for.</summary>
     public static string Of(Glass glass, GlassPageState state)
@@ -26,7 +28,7 @@ public static class GlassPageAddress
             .Add(GlassPageState.LongField.Key, state.LongEnd, GlassPageState.LongField.Default)
             .Add("stock", state.StockId)
             .ToString();
-        return Of(glass) + (query.Contains('&', StringComparison.Ordinal) ? query : "");
+        return $"glasses/{Uri.EscapeDataString(glass.Maker)}/{Uri.EscapeDataString(glass.Name)}" + (query.Contains('&', StringComparison.Ordinal) ? query : "");
     }
 
     /// <summary>Reads a query, with or without the question mark. Never throws.</summary>
