@@ -87,6 +87,21 @@ public sealed class NewcomerTests(AppFixture app)
     }
 
     [Fact]
+    public async Task TypingFasterThanTheServerAnswers_LosesNoCharacter()
+    {
+        IPage page = await app.OpenAsync("/?v=1&f=250&n=6");
+        ILocator field = page.GetByLabel("Focal length", new() { Exact = true });
+        await field.FillAsync("");
+        foreach (int pause in new[] { 0, 5, 12, 25, 40, 60 })
+        {
+            await field.PressSequentiallyAsync("1234.5678", new() { Delay = pause });
+            await page.WaitForTimeoutAsync(400);
+            await Expect(field).ToHaveValueAsync("1234.5678");
+            await field.FillAsync("");
+        }
+    }
+
+    [Fact]
     public async Task ImpossibleValue_KeepsTheLastAnswer()
     {
         IPage page = await app.OpenAsync("/?v=1&f=250&n=6");

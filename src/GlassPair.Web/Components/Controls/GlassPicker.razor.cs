@@ -32,9 +32,9 @@ public sealed partial class GlassPicker : ComponentBase
 
     private bool IsOpen => _hits.Count > 0;
 
-    private void Type(ChangeEventArgs e)
+    private void Type(string? text)
     {
-        _text = e.Value as string ?? "";
+        _text = text ?? "";
         string[] words = _text.Split([' ', '/'], StringSplitOptions.RemoveEmptyEntries);
         _hits = words.Length == 0 ? [] :
         [

@@ -6,6 +6,8 @@ namespace GlassPair.Web.Components.Controls;
 /// <summary>A field for a number or a wavelength: keeps what was typed and shows what is wrong with it beside it.</summary>
 public sealed partial class NumberInput : ComponentBase
 {
+    private readonly DraftText _draft = new();
+
     /// <summary>Gets or sets what is asked for.</summary>
     [Parameter, EditorRequired] public required NumberField Field { get; set; }
 
@@ -28,4 +30,9 @@ public sealed partial class NumberInput : ComponentBase
     [Parameter] public EventCallback<string> Typed { get; set; }
 
     private string Id => "field-" + Field.Key;
+
+    /// <inheritdoc/>
+    protected override void OnParametersSet() => _draft.Receive(Value);
+
+    private Task TypeAsync(string? text) => Typed.InvokeAsync(_draft.Text = text ?? "");
 }

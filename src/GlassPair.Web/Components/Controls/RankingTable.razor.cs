@@ -18,6 +18,7 @@ public sealed partial class RankingTable : ComponentBase
     private static readonly ImmutableArray<int> _takes = [100, 500, 2_000, ShortlistRequest.MaxTake];
     private static readonly ImmutableArray<int> _each = [1, 2, 3, 5, 10];
 
+    private readonly DraftText _filter = new();
     private bool _isChanged;
 
     /// <summary>Gets or sets what the page shows.</summary>
@@ -102,6 +103,7 @@ public sealed partial class RankingTable : ComponentBase
     protected override void OnParametersSet()
     {
         _isChanged = true;
+        _filter.Receive(State.Filter);
         Shown = State.Columns is { } keys ? [.. RankingColumn.All.Where(c => keys.Contains(c.Key))] : RankingColumn.Usual;
         Columns =
         [
@@ -121,6 +123,8 @@ public sealed partial class RankingTable : ComponentBase
         builder.AddContent(0, pair.Candidate?.Rank.ToString(CultureInfo.InvariantCulture) ?? "–");
 
     private static string SupplyWords(RankedPair pair) => $"{FigureText.Of(pair.Positive.Glass.Supply)}, {FigureText.Of(pair.Negative.Glass.Supply)}";
+
+    private Task FilterAsync(string? text) => FilterTyped.InvokeAsync(State with { Filter = _filter.Text = Cut(text) });
 
     private static string Cut(string? text) => text is null ? "" : text.Length > WorkbenchState.MaxFilterLength ? text[..WorkbenchState.MaxFilterLength] : text;
 
