@@ -18,6 +18,7 @@ internal sealed class GlassColumns
         Glasses = [.. glasses.OrderByDescending(g => g.AbbeNumber)];
         PowerLimit = requirement.ElementPowerLimit ?? double.PositiveInfinity;
         Space = requirement.AirSpace.GetValueOrDefault() / requirement.FocalLength;
+        EndsAreSamples = requirement.Band.Samples[0].Wavelength == requirement.Band.ShortEnd && requirement.Band.Samples[^1].Wavelength == requirement.Band.LongEnd;
         Weights = [.. requirement.Band.Samples.Select(s => s.Weight)];
         Abbe = Column(g => g.AbbeNumber);
         ShortChange = Column(g => g.ShortChange);
@@ -47,6 +48,9 @@ internal sealed class GlassColumns
 
     /// <summary>Gets δ, the air space in units of the focal length; 0 in contact.</summary>
     public double Space { get; }
+
+    /// <summary>Gets whether the first and the last sample stand at the ends of the band, whose figures are then theirs.</summary>
+    public bool EndsAreSamples { get; }
 
     /// <summary>Gets the weight of each sample.</summary>
     public double[] Weights { get; }

@@ -40,8 +40,6 @@ internal interface ILanes<T>
 
     static abstract T operator &(T left, T right);
 
-    static abstract T operator ~(T value);
-
     static abstract T AreEqual(T left, T right);
 
     static abstract T AtMost(T left, T right);
@@ -87,8 +85,6 @@ internal readonly struct Lanes512(Vector512<double> value) : ILanes<Lanes512>
     public static Lanes512 operator /(Lanes512 left, Lanes512 right) => new(left._value / right._value);
 
     public static Lanes512 operator &(Lanes512 left, Lanes512 right) => new(left._value & right._value);
-
-    public static Lanes512 operator ~(Lanes512 value) => new(~value._value);
 
     public static Lanes512 Abs(Lanes512 value) => new(Vector512.Abs(value._value));
 
@@ -149,8 +145,6 @@ internal readonly struct Lanes256(Vector256<double> value) : ILanes<Lanes256>
     public static Lanes256 operator /(Lanes256 left, Lanes256 right) => new(left._value / right._value);
 
     public static Lanes256 operator &(Lanes256 left, Lanes256 right) => new(left._value & right._value);
-
-    public static Lanes256 operator ~(Lanes256 value) => new(~value._value);
 
     public static Lanes256 Abs(Lanes256 value) => new(Vector256.Abs(value._value));
 

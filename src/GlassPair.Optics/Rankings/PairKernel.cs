@@ -80,8 +80,35 @@ internal static class PairKernel
     }
 
     /// <summary>Vector twin of <see cref="FillScalar"/>: lane l holds partner rear + l.</summary>
-    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    /// <remarks>Powers of the whole row first, then the rest: the processor overlaps more of the shorter loops.</remarks>
     public static void FillVector<T>(GlassColumns glasses, int front, RowFigures row)
+        where T : unmanaged, ILanes<T>
+    {
+        FillPowers<T>(glasses, front, row);
+        FillFigures<T>(glasses, front, row);
+    }
+
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private static void FillPowers<T>(GlassColumns glasses, int front, RowFigures row)
+        where T : unmanaged, ILanes<T>
+    {
+        Span<double> deviations = stackalloc double[glasses.Weights.Length];
+        for (int k = 0; k < deviations.Length; k++)
+        {
+            deviations[k] = glasses.Changes[k][front] - glasses.Mean[front];
+        }
+
+        (double[] frontPower, double[] rearPower) = (row.Powers[0], row.Powers[1]);
+        for (int rear = front + 1; rear < glasses.Count; rear += T.Count)
+        {
+            (T p1, T p2) = Powers<T>(glasses, front, deviations, rear);
+            p1.Store(frontPower, rear);
+            p2.Store(rearPower, rear);
+        }
+    }
+
+    [MethodImpl(MethodImplOptions.AggressiveOptimization)]
+    private static void FillFigures<T>(GlassColumns glasses, int front, RowFigures row)
         where T : unmanaged, ILanes<T>
     {
         T one = T.All(1.0);
@@ -89,12 +116,18 @@ internal static class PairKernel
         double space = glasses.Space;
         T powerLimit = T.All(glasses.PowerLimit);
         double[] weights = glasses.Weights;
+        double[][] columns = glasses.Changes;
+        (double[] frontPower, double[] rearPower) = (row.Powers[0], row.Powers[1]);
         Span<T> shifts = stackalloc T[weights.Length];
+        Span<double> frontChanges = stackalloc double[weights.Length];
+        for (int k = 0; k < frontChanges.Length; k++)
+        {
+            frontChanges[k] = columns[k][front];
+        }
+
         for (int rear = front + 1; rear < glasses.Count; rear += T.Count)
         {
-            (T p1, T p2) = Powers<T>(glasses, front, rear);
-            p1.Store(row.Powers[0], rear);
-            p2.Store(row.Powers[1], rear);
+            (T p1, T p2) = (T.Load(frontPower, rear), T.Load(rearPower, rear));
             if (T.Bits(T.AtMost(T.Max(T.Abs(p1), T.Abs(p2)), powerLimit)) == 0)
             {
                 continue;
@@ -103,10 +136,9 @@ internal static class PairKernel
             T mean = T.All(0.0);
             T least = T.All(double.PositiveInfinity);
             T most = T.All(double.NegativeInfinity);
-            for (int k = 0; k < shifts.Length; k++)
+            for (int k = 0; k < weights.Length; k++)
             {
-                double[] changes = glasses.Changes[k];
-                T shift = focal * Shift(p1, p2, T.All(changes[front]), T.Load(changes, rear), space);
+                T shift = focal * Shift(p1, p2, T.All(frontChanges[k]), T.Load(columns[k], rear), space);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
                 least = T.Min(least, shift);
@@ -114,15 +146,17 @@ internal static class PairKernel
             }
 
             T variance = T.All(0.0);
-            for (int k = 0; k < shifts.Length; k++)
+            for (int k = 0; k < weights.Length; k++)
             {
                 T off = shifts[k] - mean;
                 variance += weights[k] * off * off;
             }
 
             T rms = T.SquareRoot(variance);
-            T shortShift = focal * Shift(p1, p2, T.All(glasses.ShortChange[front]), T.Load(glasses.ShortChange, rear), space);
-            T longShift = focal * Shift(p1, p2, T.All(glasses.LongChange[front]), T.Load(glasses.LongChange, rear), space);
+            (T shortShift, T longShift) = glasses.EndsAreSamples
+                ? (shifts[0], shifts[^1])
+                : (focal * Shift(p1, p2, T.All(glasses.ShortChange[front]), T.Load(glasses.ShortChange, rear), space),
+                    focal * Shift(p1, p2, T.All(glasses.LongChange[front]), T.Load(glasses.LongChange, rear), space));
             T height = one - (space * p1);
             T rearWeight = height * height * p2;
             T floor = focal * T.SquareRoot((p1 * p1 * T.All(glasses.Floor[front])) + (rearWeight * rearWeight * T.Load(glasses.Floor, rear)));
@@ -140,7 +174,7 @@ internal static class PairKernel
         bool endsUnited = glasses.Requirement.Balance == ColorBalance.EndsUnited;
         double v1 = glasses.Abbe[front];
         double v2 = glasses.Abbe[rear];
-        (double along, double alongFront, double gap) = endsUnited ? (v1, -v2, v1 - v2) : Balance(glasses, front, rear);
+        (double along, double gap) = endsUnited ? (v1, v1 - v2) : Balance(glasses, front, rear);
         if (space != 0.0)
         {
             double start = EndsUnited(v1, v2, space);
@@ -152,7 +186,7 @@ internal static class PairKernel
         double p2 = 1.0 - p1;
         if (p2 > p1)
         {
-            p2 = Checked(alongFront / gap);
+            p2 = Checked((endsUnited ? -v2 : Balance(glasses, rear, front).Along) / gap);
             p1 = 1.0 - p2;
         }
 
@@ -162,7 +196,7 @@ internal static class PairKernel
     }
 
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (T Front, T Rear) Powers<T>(GlassColumns glasses, int front, int rear)
+    private static (T Front, T Rear) Powers<T>(GlassColumns glasses, int front, ReadOnlySpan<double> deviations, int rear)
         where T : unmanaged, ILanes<T>
     {
         T one = T.All(1.0);
@@ -170,7 +204,7 @@ internal static class PairKernel
         bool endsUnited = glasses.Requirement.Balance == ColorBalance.EndsUnited;
         T v1 = T.All(glasses.Abbe[front]);
         T v2 = T.Load(glasses.Abbe, rear);
-        (T along, T alongFront, T gap) = endsUnited ? (v1, -v2, v1 - v2) : Balance<T>(glasses, front, rear);
+        (T along, T gap) = endsUnited ? (v1, v1 - v2) : Balance<T>(glasses, deviations, rear);
         if (space != 0.0)
         {
             T start = EndsUnited(v1, v2, space);
@@ -183,13 +217,14 @@ internal static class PairKernel
         T turned = T.Exceeds(p2, p1);
         if (T.Bits(turned) != 0)
         {
-            T rearPower = Checked(alongFront / gap);
+            T rearPower = Checked((endsUnited ? -v2 : AlongFront<T>(glasses, deviations, rear)) / gap);
             p2 = T.Select(turned, rearPower, p2);
             p1 = T.Select(turned, one - rearPower, p1);
         }
 
         return (p1, p2);
 
+        [MethodImpl(MethodImplOptions.AggressiveInlining)]
         static T Checked(T power) => T.Select(T.AtMost(T.Abs(power), T.All(ThinSolution.LargestPower)), power, T.All(double.NaN));
     }
 
@@ -225,48 +260,56 @@ internal static class PairKernel
         return -((space * front) + (height * s)) / (one + s);
     }
 
-    /// <summary>c₂·(c₂ − c₁), c₁·(c₁ − c₂) and |c₂ − c₁|² of <see cref="ThinPair.BandBalanced"/>.</summary>
-    private static (double AlongRear, double AlongFront, double Gap) Balance(GlassColumns glasses, int front, int rear)
+    /// <summary>c₂·(c₂ − c₁) and |c₂ − c₁|² of <see cref="ThinPair.BandBalanced"/>.</summary>
+    private static (double Along, double Gap) Balance(GlassColumns glasses, int first, int second)
     {
-        double alongRear = 0.0;
-        double alongFront = 0.0;
+        double along = 0.0;
         double gap = 0.0;
         for (int k = 0; k < glasses.Weights.Length; k++)
         {
             double weight = glasses.Weights[k];
-            double c1 = glasses.Changes[k][front] - glasses.Mean[front];
-            double c2 = glasses.Changes[k][rear] - glasses.Mean[rear];
-            double difference = c2 - c1;
-            alongRear += weight * c2 * difference;
-            alongFront -= weight * c1 * difference;
+            double c2 = glasses.Changes[k][second] - glasses.Mean[second];
+            double difference = c2 - (glasses.Changes[k][first] - glasses.Mean[first]);
+            along += weight * c2 * difference;
             gap += weight * difference * difference;
         }
 
-        return (alongRear, alongFront, gap);
+        return (along, gap);
     }
 
+    /// <summary>The same, with the deviations c₁ of the first glass by sample.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (T AlongRear, T AlongFront, T Gap) Balance<T>(GlassColumns glasses, int front, int rear)
+    private static (T Along, T Gap) Balance<T>(GlassColumns glasses, ReadOnlySpan<double> deviations, int rear)
         where T : unmanaged, ILanes<T>
     {
         double[] weights = glasses.Weights;
-        double frontMean = glasses.Mean[front];
-        T rearMean = T.Load(glasses.Mean, rear);
-        T alongRear = T.All(0.0);
-        T alongFront = T.All(0.0);
+        double[][] columns = glasses.Changes;
+        T mean = T.Load(glasses.Mean, rear);
+        T along = T.All(0.0);
         T gap = T.All(0.0);
         for (int k = 0; k < weights.Length; k++)
         {
-            double[] changes = glasses.Changes[k];
-            double c1 = changes[front] - frontMean;
-            T c2 = T.Load(changes, rear) - rearMean;
-            T difference = c2 - T.All(c1);
-            alongRear += weights[k] * c2 * difference;
-            alongFront -= weights[k] * c1 * difference;
+            T c2 = T.Load(columns[k], rear) - mean;
+            T difference = c2 - T.All(deviations[k]);
+            along += weights[k] * c2 * difference;
             gap += weights[k] * difference * difference;
         }
 
-        return (alongRear, alongFront, gap);
+        return (along, gap);
+    }
+
+    /// <summary>c₁·(c₁ − c₂): what <see cref="Balance{T}"/> gives first with the glasses the other way round.</summary>
+    private static T AlongFront<T>(GlassColumns glasses, ReadOnlySpan<double> deviations, int rear)
+        where T : unmanaged, ILanes<T>
+    {
+        T along = T.All(0.0);
+        for (int k = 0; k < deviations.Length; k++)
+        {
+            T difference = T.All(deviations[k]) - (T.Load(glasses.Changes[k], rear) - T.Load(glasses.Mean, rear));
+            along += glasses.Weights[k] * deviations[k] * difference;
+        }
+
+        return along;
     }
 
     /// <summary>See <see cref="ThinPair.EndsUnited"/>; NaN where it is null.</summary>

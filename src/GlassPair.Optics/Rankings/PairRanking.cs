@@ -13,6 +13,7 @@ public static class PairRanking
     /// <param name="request">What to rank.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <exception cref="ArgumentException">The table was made for another band, or the request asks for three elements.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">The candidates asked for are not 1 to 5,000, or a glass may stand in none.</exception>
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
     public static Shortlist Rank(IndexTable table, ShortlistRequest request, CancellationToken cancellation = default)
     {

@@ -24,7 +24,7 @@ public enum RankBy
 /// <param name="Quality">How well the glasses are known.</param>
 /// <param name="RankBy">The figure to rank by.</param>
 /// <param name="Take">How many candidates to keep, 1 to 5,000.</param>
-/// <param name="PairsPerGlass">In how many candidates one glass may stand; null allows any number.</param>
+/// <param name="PairsPerGlass">In how many candidates one glass may stand, 1 or more; null allows any number.</param>
 public sealed record ShortlistRequest(
     Requirement Requirement, GlassLimits Limits, DataQuality Quality, RankBy RankBy, int Take, int? PairsPerGlass = null)
 {

@@ -16,9 +16,12 @@ internal static class ShortlistMaker
     /// <param name="solveRows">Solves every row.</param>
     /// <param name="solve">Solves one combination, given in the order of the columns, as a shortlist shows it; its figures are those of the row to the last bit.</param>
     /// <param name="cancellation">Stops the work.</param>
+    /// <exception cref="ArgumentOutOfRangeException">The request asks for too few or too many candidates, or for glasses that may stand in none.</exception>
     public static Shortlist Make(
         IndexTable table, ShortlistRequest request, int poolPerPick, RowSolver solveRows, Func<GlassIndices[], ThinOutcome> solve, CancellationToken cancellation)
     {
+        Guard.InRange(request.Take, 1, ShortlistRequest.MaxTake);
+        Guard.InRange(request.PairsPerGlass ?? 1, 1, int.MaxValue, nameof(request.PairsPerGlass));
         GlassSelection selection = GlassSelection.From(table, request);
         var picks = new CandidatePicks(request, poolPerPick);
         (GlassColumns glasses, RowScreen all, CandidatePool pool) = ScreenAll(selection.Distinct, double.NegativeInfinity);

@@ -186,8 +186,9 @@ internal sealed class TripletKernel
             T floor = focal * T.SquareRoot((p1 * p1 * f1) + (p2 * p2 * f2) + (p3 * p3 * f3));
             rms.Store(figures.Rms, third);
             (most - least).Store(figures.PeakToValley, third);
-            T shortShift = focal * Shift(p1, p2, p3, order, row, third, _glasses.ShortChange);
-            T longShift = focal * Shift(p1, p2, p3, order, row, third, _glasses.LongChange);
+            (T shortShift, T longShift) = _glasses.EndsAreSamples
+                ? (shifts[0], shifts[^1])
+                : (focal * Shift(p1, p2, p3, order, row, third, _glasses.ShortChange), focal * Shift(p1, p2, p3, order, row, third, _glasses.LongChange));
             (-0.5 * (shortShift + longShift)).Store(figures.SecondarySpectrum, third);
             T.SquareRoot((rms * rms) + (floor * floor)).Store(figures.ExpectedRms, third);
         }

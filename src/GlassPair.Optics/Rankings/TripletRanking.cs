@@ -17,6 +17,7 @@ public static class TripletRanking
     /// <param name="request">What to rank, with three elements. Where the requirement has no limit on power, the shortlist's has <see cref="UsualPowerLimit"/>.</param>
     /// <param name="cancellation">Stops the work.</param>
     /// <exception cref="ArgumentException">The table was made for another band, the request does not ask for three elements, or <see cref="FindFault"/> finds a fault.</exception>
+    /// <exception cref="ArgumentOutOfRangeException">The candidates asked for are not 1 to 5,000, or a glass may stand in none.</exception>
     /// <exception cref="OperationCanceledException">The work was stopped.</exception>
     public static Shortlist Rank(IndexTable table, ShortlistRequest request, CancellationToken cancellation = default)
     {

@@ -227,6 +227,15 @@ public sealed class PairRankingTests
     public void Rank_TableOfAnotherBand_IsRefused() =>
         Assert.Throws<ArgumentException>(() => PairRanking.Rank(RankingCases.Every(40, RankingCases.Weighted), RankingCases.Objective.By(RankBy.ColorResidual)));
 
+    [Theory]
+    [InlineData(0, 1)]
+    [InlineData(-1, 1)]
+    [InlineData(ShortlistRequest.MaxTake + 1, 1)]
+    [InlineData(1, 0)]
+    public void Rank_NumbersOutOfRange_AreRefused(int take, int pairsPerGlass) =>
+        Assert.Throws<ArgumentOutOfRangeException>(() => PairRanking.Rank(
+            RankingCases.Every(40, RankingCases.Visible), RankingCases.Objective.By(RankBy.ColorResidual, take) with { PairsPerGlass = pairsPerGlass }));
+
     [Fact]
     public void Rank_Cancelled_Stops()
     {
