@@ -34,13 +34,17 @@ public sealed record ThinSolution : ThinOutcome
     /// <summary>Powers past this size, in units of the whole power, mean that no balance exists.</summary>
     public const double LargestPower = 1e4;
 
+    private readonly double _variance;
+
     internal ThinSolution(Requirement requirement, ImmutableArray<GlassIndices> elements, ImmutableArray<double> relativePowers)
     {
         (Requirement, Elements, RelativePowers) = (requirement, elements, relativePowers);
-        FocalShifts = [.. Enumerable.Range(0, requirement.Band.Samples.Length).Select(i => Shift([.. elements.Select(e => e.Changes[i])]))];
-        ShortShift = Shift([.. elements.Select(e => e.ShortChange)]);
-        LongShift = Shift([.. elements.Select(e => e.LongChange)]);
-        RmsFocalShift = Math.Sqrt(requirement.Band.VarianceOf(FocalShifts.AsSpan()));
+        double[] shifts = [.. Enumerable.Range(0, requirement.Band.Samples.Length).Select(i => RelativeShift([.. elements.Select(e => e.Changes[i])]))];
+        FocalShifts = [.. shifts.Select(shift => requirement.FocalLength * shift)];
+        ShortShift = requirement.FocalLength * RelativeShift([.. elements.Select(e => e.ShortChange)]);
+        LongShift = requirement.FocalLength * RelativeShift([.. elements.Select(e => e.LongChange)]);
+        _variance = requirement.Band.VarianceOf(shifts);
+        RmsFocalShift = requirement.FocalLength * Math.Sqrt(_variance);
     }
 
     /// <summary>Gets what was asked for.</summary>
@@ -109,10 +113,16 @@ public sealed record ThinSolution : ThinOutcome
 
     /// <summary>Gets the focal shift at any wavelength that all glasses cover, mm.</summary>
     /// <exception cref="Glasses.WavelengthOutOfRangeException">A glass has no index there.</exception>
-    public double FocalShiftAt(Wavelength wavelength) => Shift([.. Elements.Select(e => e.ChangeAt(wavelength))]);
+    public double FocalShiftAt(Wavelength wavelength) =>
+        Requirement.FocalLength * RelativeShift([.. Elements.Select(e => e.ChangeAt(wavelength))]);
 
     /// <summary>Gets the part of the color residual that cannot be known from index data and melts, mm. Source: [data-floor].</summary>
-    public double DataFloor(DataQuality quality)
+    public double DataFloor(DataQuality quality) => Requirement.FocalLength * Math.Sqrt(UnknownVariance(quality));
+
+    /// <summary>Gets the color residual to be expected of the glass really delivered, mm: residual and data floor, root-sum-square.</summary>
+    public double ExpectedRmsFocalShift(DataQuality quality) => Requirement.FocalLength * Math.Sqrt(_variance + UnknownVariance(quality));
+
+    private double UnknownVariance(DataQuality quality)
     {
         double sum = 0.0;
         for (int i = 0; i < Elements.Length; i++)
@@ -121,14 +131,7 @@ public sealed record ThinSolution : ThinOutcome
             sum += weight * weight * ThinFloor.Of(Elements[i], Requirement.Band, quality);
         }
 
-        return Requirement.FocalLength * Math.Sqrt(sum);
-    }
-
-    /// <summary>Gets the color residual to be expected of the glass really delivered, mm: residual and data floor, root-sum-square.</summary>
-    public double ExpectedRmsFocalShift(DataQuality quality)
-    {
-        double floor = DataFloor(quality);
-        return Math.Sqrt((RmsFocalShift * RmsFocalShift) + (floor * floor));
+        return sum;
     }
 
     /// <summary>How much of element i's relative power change moves the focus: its power, by the square of the ray height where it stands.</summary>
@@ -138,6 +141,7 @@ public sealed record ThinSolution : ThinOutcome
         return height * height * RelativePowers[i];
     }
 
-    private double Shift(ReadOnlySpan<double> changes) =>
-        Requirement.FocalLength * FocalShift.Of(RelativePowers.AsSpan(), changes, Requirement.AirSpace.GetValueOrDefault() / Requirement.FocalLength);
+    /// <summary>The focal shift in units of the focal length.</summary>
+    private double RelativeShift(ReadOnlySpan<double> changes) =>
+        FocalShift.Of(RelativePowers.AsSpan(), changes, Requirement.AirSpace.GetValueOrDefault() / Requirement.FocalLength);
 }

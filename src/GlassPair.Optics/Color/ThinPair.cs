@@ -60,24 +60,22 @@ public static class ThinPair
     /// <summary>p₁ of least variance of p₁ t₁ + y₂² p₂ t₂ over the samples; null where there is no such minimum near the achromat.</summary>
     internal static double? BandBalanced(GlassIndices front, GlassIndices rear, Band band, double space)
     {
-        double frontMean = band.MeanOf(front.Changes.AsSpan());
-        double rearMean = band.MeanOf(rear.Changes.AsSpan());
+        double[] c1 = band.DeviationsOf(front.Changes.AsSpan());
+        double[] c2 = band.DeviationsOf(rear.Changes.AsSpan());
         double along = 0.0;
         double gap = 0.0;
-        for (int i = 0; i < band.Samples.Length; i++)
+        double rearVariance = 0.0;
+        for (int i = 0; i < c2.Length; i++)
         {
-            double weight = band.Samples[i].Weight;
-            double c2 = rear.Changes[i] - rearMean;
-            double difference = c2 - (front.Changes[i] - frontMean);
-            along += weight * c2 * difference;
-            gap += weight * difference * difference;
+            double difference = c2[i] - c1[i];
+            along += c2[i] * difference;
+            gap += difference * difference;
+            rearVariance += c2[i] * c2[i];
         }
 
         // p₁ = c₂·(c₂ − c₁)/|c₂ − c₁|²: equal to (G₂₂ − G₁₂)/(G₁₁ + G₂₂ − 2 G₁₂), without its cancellation
         return space == 0.0 ? gap > 0.0 ? along / gap : null
-            : EndsUnited(front.AbbeNumber, rear.AbbeNumber, space) is { } start
-                ? AirSpacedBalance(along, gap, band.VarianceOf(rear.Changes.AsSpan()), space, start)
-                : null;
+            : EndsUnited(front.AbbeNumber, rear.AbbeNumber, space) is { } start ? AirSpacedBalance(along, gap, rearVariance, space, start) : null;
     }
 
     /// <summary>

@@ -39,24 +39,18 @@ public static class ThinTriplet
         return (((cs * a.LongChange) - (cl * a.ShortChange)) / determinant, ((bl * a.ShortChange) - (bs * a.LongChange)) / determinant);
     }
 
-    /// <summary>Least squares of c₁ + p₂ (c₂ − c₁) + p₃ (c₃ − c₁) by orthogonalization, c the weighted deviations of t from their mean.</summary>
+    /// <summary>Least squares of c₁ + p₂ (c₂ − c₁) + p₃ (c₃ − c₁) by orthogonalization, c the deviations of t.</summary>
     private static (double Second, double Third) BandBalanced(GlassIndices a, GlassIndices b, GlassIndices c, Band band)
     {
-        double[] target = Deviations(a, band);
-        double[] u = Subtract(Deviations(b, band), target);
-        double[] v = Subtract(Deviations(c, band), target);
+        double[] target = band.DeviationsOf(a.Changes.AsSpan());
+        double[] u = Subtract(band.DeviationsOf(b.Changes.AsSpan()), target);
+        double[] v = Subtract(band.DeviationsOf(c.Changes.AsSpan()), target);
         double uu = Dot(u, u);
         double projection = Dot(u, v) / uu;
         double[] w = [.. v.Select((value, i) => value - (projection * u[i]))];
         double third = -Dot(w, target) / Dot(w, w);
         double second = -(Dot(u, target) / uu) - (third * projection);
         return (second, third);
-    }
-
-    private static double[] Deviations(GlassIndices glass, Band band)
-    {
-        double mean = band.MeanOf(glass.Changes.AsSpan());
-        return [.. band.Samples.Select((s, i) => Math.Sqrt(s.Weight) * (glass.Changes[i] - mean))];
     }
 
     private static double[] Subtract(double[] left, double[] right) => [.. left.Select((value, i) => value - right[i])];

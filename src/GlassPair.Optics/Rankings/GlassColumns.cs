@@ -23,14 +23,19 @@ internal sealed class GlassColumns
         Abbe = Column(g => g.AbbeNumber);
         ShortChange = Column(g => g.ShortChange);
         LongChange = Column(g => g.LongChange);
-        Mean = Column(g => requirement.Band.MeanOf(g.Changes.AsSpan()));
-        Variance = Column(g => requirement.Band.VarianceOf(g.Changes.AsSpan()));
         Floor = Column(g => ThinFloor.Of(g, requirement.Band, quality));
         Expansion = Column(g => g.Glass.ExpansionPerKelvin ?? double.NaN);
-        Changes = new double[Weights.Length][];
+        double[][] deviations = [.. Glasses.Select(g => requirement.Band.DeviationsOf(g.Changes.AsSpan()))];
+        (Changes, Deviations) = (new double[Weights.Length][], new double[Weights.Length][]);
+        Variance = new double[Abbe.Length];
         for (int k = 0; k < Weights.Length; k++)
         {
-            Changes[k] = Column(g => g.Changes[k]);
+            Changes[k] = Column(j => Glasses[j].Changes[k]);
+            Deviations[k] = Column(j => deviations[j][k]);
+            for (int j = 0; j < Variance.Length; j++)
+            {
+                Variance[j] += Deviations[k][j] * Deviations[k][j];
+            }
         }
     }
 
@@ -67,8 +72,8 @@ internal sealed class GlassColumns
     /// <summary>Gets t by sample, then glass.</summary>
     public double[][] Changes { get; }
 
-    /// <summary>Gets the weighted mean of t over the samples.</summary>
-    public double[] Mean { get; }
+    /// <summary>Gets √w (t − t̄) by sample, then glass, see <see cref="Spectrum.Band.DeviationsOf"/>.</summary>
+    public double[][] Deviations { get; }
 
     /// <summary>Gets the weighted variance of t over the samples.</summary>
     public double[] Variance { get; }
@@ -79,12 +84,14 @@ internal sealed class GlassColumns
     /// <summary>Gets the linear expansion per kelvin; NaN where unknown.</summary>
     public double[] Expansion { get; }
 
-    private double[] Column(Func<GlassIndices, double> value)
+    private double[] Column(Func<GlassIndices, double> value) => Column(j => value(Glasses[j]));
+
+    private double[] Column(Func<int, double> value)
     {
         double[] column = new double[Count + Padding];
         for (int j = 0; j < Count; j++)
         {
-            column[j] = value(Glasses[j]);
+            column[j] = value(j);
         }
 
         if (Count > 0)

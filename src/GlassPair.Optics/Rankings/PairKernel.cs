@@ -52,7 +52,7 @@ internal static class PairKernel
             double most = double.NegativeInfinity;
             for (int k = 0; k < weights.Length; k++)
             {
-                double shift = focal * Shift(p1, p2, glasses.Changes[k][front], glasses.Changes[k][rear], space);
+                double shift = Shift(p1, p2, glasses.Changes[k][front], glasses.Changes[k][rear], space);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
                 least = Math.Min(least, shift);
@@ -66,16 +66,15 @@ internal static class PairKernel
                 variance += weights[k] * off * off;
             }
 
-            double rms = Math.Sqrt(variance);
             double shortShift = focal * Shift(p1, p2, glasses.ShortChange[front], glasses.ShortChange[rear], space);
             double longShift = focal * Shift(p1, p2, glasses.LongChange[front], glasses.LongChange[rear], space);
             double height = 1.0 - (space * p1);
             double rearWeight = height * height * p2;
-            double floor = focal * Math.Sqrt((p1 * p1 * glasses.Floor[front]) + (rearWeight * rearWeight * glasses.Floor[rear]));
-            row.Rms[rear] = rms;
-            row.PeakToValley[rear] = most - least;
+            double unknown = (p1 * p1 * glasses.Floor[front]) + (rearWeight * rearWeight * glasses.Floor[rear]);
+            row.Rms[rear] = focal * Math.Sqrt(variance);
+            row.PeakToValley[rear] = (focal * most) - (focal * least);
             row.SecondarySpectrum[rear] = -0.5 * (shortShift + longShift);
-            row.ExpectedRms[rear] = Math.Sqrt((rms * rms) + (floor * floor));
+            row.ExpectedRms[rear] = focal * Math.Sqrt(variance + unknown);
         }
     }
 
@@ -95,7 +94,7 @@ internal static class PairKernel
         Span<double> deviations = stackalloc double[glasses.Weights.Length];
         for (int k = 0; k < deviations.Length; k++)
         {
-            deviations[k] = glasses.Changes[k][front] - glasses.Mean[front];
+            deviations[k] = glasses.Deviations[k][front];
         }
 
         (double[] frontPower, double[] rearPower) = (row.Powers[0], row.Powers[1]);
@@ -138,7 +137,7 @@ internal static class PairKernel
             T most = T.All(double.NegativeInfinity);
             for (int k = 0; k < weights.Length; k++)
             {
-                T shift = focal * Shift(p1, p2, T.All(frontChanges[k]), T.Load(columns[k], rear), space);
+                T shift = Shift(p1, p2, T.All(frontChanges[k]), T.Load(columns[k], rear), space);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
                 least = T.Min(least, shift);
@@ -152,18 +151,17 @@ internal static class PairKernel
                 variance += weights[k] * off * off;
             }
 
-            T rms = T.SquareRoot(variance);
             (T shortShift, T longShift) = glasses.EndsAreSamples
                 ? (shifts[0], shifts[^1])
-                : (focal * Shift(p1, p2, T.All(glasses.ShortChange[front]), T.Load(glasses.ShortChange, rear), space),
-                    focal * Shift(p1, p2, T.All(glasses.LongChange[front]), T.Load(glasses.LongChange, rear), space));
+                : (Shift(p1, p2, T.All(glasses.ShortChange[front]), T.Load(glasses.ShortChange, rear), space),
+                    Shift(p1, p2, T.All(glasses.LongChange[front]), T.Load(glasses.LongChange, rear), space));
             T height = one - (space * p1);
             T rearWeight = height * height * p2;
-            T floor = focal * T.SquareRoot((p1 * p1 * T.All(glasses.Floor[front])) + (rearWeight * rearWeight * T.Load(glasses.Floor, rear)));
-            rms.Store(row.Rms, rear);
-            (most - least).Store(row.PeakToValley, rear);
-            (-0.5 * (shortShift + longShift)).Store(row.SecondarySpectrum, rear);
-            T.SquareRoot((rms * rms) + (floor * floor)).Store(row.ExpectedRms, rear);
+            T unknown = (p1 * p1 * T.All(glasses.Floor[front])) + (rearWeight * rearWeight * T.Load(glasses.Floor, rear));
+            (focal * T.SquareRoot(variance)).Store(row.Rms, rear);
+            ((focal * most) - (focal * least)).Store(row.PeakToValley, rear);
+            (-0.5 * ((focal * shortShift) + (focal * longShift))).Store(row.SecondarySpectrum, rear);
+            (focal * T.SquareRoot(variance + unknown)).Store(row.ExpectedRms, rear);
         }
     }
 
@@ -265,13 +263,11 @@ internal static class PairKernel
     {
         double along = 0.0;
         double gap = 0.0;
-        for (int k = 0; k < glasses.Weights.Length; k++)
+        foreach (double[] deviations in glasses.Deviations)
         {
-            double weight = glasses.Weights[k];
-            double c2 = glasses.Changes[k][second] - glasses.Mean[second];
-            double difference = c2 - (glasses.Changes[k][first] - glasses.Mean[first]);
-            along += weight * c2 * difference;
-            gap += weight * difference * difference;
+            double difference = deviations[second] - deviations[first];
+            along += deviations[second] * difference;
+            gap += difference * difference;
         }
 
         return (along, gap);
@@ -279,34 +275,31 @@ internal static class PairKernel
 
     /// <summary>The same, with the deviations c₁ of the first glass by sample.</summary>
     [MethodImpl(MethodImplOptions.AggressiveInlining)]
-    private static (T Along, T Gap) Balance<T>(GlassColumns glasses, ReadOnlySpan<double> deviations, int rear)
+    private static (T Along, T Gap) Balance<T>(GlassColumns glasses, ReadOnlySpan<double> first, int rear)
         where T : unmanaged, ILanes<T>
     {
-        double[] weights = glasses.Weights;
-        double[][] columns = glasses.Changes;
-        T mean = T.Load(glasses.Mean, rear);
+        double[][] deviations = glasses.Deviations;
         T along = T.All(0.0);
         T gap = T.All(0.0);
-        for (int k = 0; k < weights.Length; k++)
+        for (int k = 0; k < deviations.Length; k++)
         {
-            T c2 = T.Load(columns[k], rear) - mean;
-            T difference = c2 - T.All(deviations[k]);
-            along += weights[k] * c2 * difference;
-            gap += weights[k] * difference * difference;
+            T second = T.Load(deviations[k], rear);
+            T difference = second - T.All(first[k]);
+            along += second * difference;
+            gap += difference * difference;
         }
 
         return (along, gap);
     }
 
     /// <summary>c₁·(c₁ − c₂): what <see cref="Balance{T}"/> gives first with the glasses the other way round.</summary>
-    private static T AlongFront<T>(GlassColumns glasses, ReadOnlySpan<double> deviations, int rear)
+    private static T AlongFront<T>(GlassColumns glasses, ReadOnlySpan<double> first, int rear)
         where T : unmanaged, ILanes<T>
     {
         T along = T.All(0.0);
-        for (int k = 0; k < deviations.Length; k++)
+        for (int k = 0; k < first.Length; k++)
         {
-            T difference = T.All(deviations[k]) - (T.Load(glasses.Changes[k], rear) - T.Load(glasses.Mean, rear));
-            along += glasses.Weights[k] * deviations[k] * difference;
+            along += first[k] * (T.All(first[k]) - T.Load(glasses.Deviations[k], rear));
         }
 
         return along;

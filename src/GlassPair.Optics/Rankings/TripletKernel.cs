@@ -14,7 +14,7 @@ internal sealed class TripletKernel
 {
     private readonly GlassColumns _glasses;
 
-    // √w (t − t̄) by sample, then glass: of the glass itself, and less that of the first glass of the row.
+    // By sample, then glass: its deviation, and that less the first glass's of the row.
     private readonly double[] _deviations;
     private readonly double[] _differences;
     private readonly int _stride;
@@ -28,7 +28,7 @@ internal sealed class TripletKernel
     {
         _glasses = glasses;
         _stride = glasses.Abbe.Length;
-        _deviations = [.. glasses.Changes.SelectMany((t, k) => t.Select((change, j) => Math.Sqrt(glasses.Weights[k]) * (change - glasses.Mean[j])))];
+        _deviations = [.. glasses.Deviations.SelectMany(d => d)];
         _differences = new double[_deviations.Length];
         _squares = new double[glasses.Abbe.Length];
         _products = new double[glasses.Abbe.Length];
@@ -83,7 +83,7 @@ internal sealed class TripletKernel
             double most = double.NegativeInfinity;
             for (int k = 0; k < weights.Length; k++)
             {
-                double shift = focal * Shift(powers, order, _glasses.Changes[k]);
+                double shift = Shift(powers, order, _glasses.Changes[k]);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
                 least = Math.Min(least, shift);
@@ -97,19 +97,17 @@ internal sealed class TripletKernel
                 variance += weights[k] * off * off;
             }
 
-            double rms = Math.Sqrt(variance);
-            double floor = 0.0;
+            double unknown = 0.0;
             for (int i = 0; i < powers.Length; i++)
             {
-                floor += powers[i] * powers[i] * _glasses.Floor[order[i]];
+                unknown += powers[i] * powers[i] * _glasses.Floor[order[i]];
             }
 
-            floor = focal * Math.Sqrt(floor);
-            figures.Rms[third] = rms;
-            figures.PeakToValley[third] = most - least;
+            figures.Rms[third] = focal * Math.Sqrt(variance);
+            figures.PeakToValley[third] = (focal * most) - (focal * least);
             figures.SecondarySpectrum[third] =
                 -0.5 * ((focal * Shift(powers, order, _glasses.ShortChange)) + (focal * Shift(powers, order, _glasses.LongChange)));
-            figures.ExpectedRms[third] = Math.Sqrt((rms * rms) + (floor * floor));
+            figures.ExpectedRms[third] = focal * Math.Sqrt(variance + unknown);
         }
 
         static void Exchange(Span<double> powers, Span<int> order, int i)
@@ -166,7 +164,7 @@ internal sealed class TripletKernel
             T most = T.All(double.NegativeInfinity);
             for (int k = 0; k < shifts.Length; k++)
             {
-                T shift = focal * Shift(p1, p2, p3, order, row, third, _glasses.Changes[k]);
+                T shift = Shift(p1, p2, p3, order, row, third, _glasses.Changes[k]);
                 shifts[k] = shift;
                 mean += weights[k] * shift;
                 least = T.Min(least, shift);
@@ -180,17 +178,16 @@ internal sealed class TripletKernel
                 variance += weights[k] * off * off;
             }
 
-            T rms = T.SquareRoot(variance);
             (T f1, T f2, T f3) = (T.All(_glasses.Floor[row.First]), T.All(_glasses.Floor[row.Second]), T.Load(_glasses.Floor, third));
             order.Apply(ref f1, ref f2, ref f3);
-            T floor = focal * T.SquareRoot((p1 * p1 * f1) + (p2 * p2 * f2) + (p3 * p3 * f3));
-            rms.Store(figures.Rms, third);
-            (most - least).Store(figures.PeakToValley, third);
+            T unknown = (p1 * p1 * f1) + (p2 * p2 * f2) + (p3 * p3 * f3);
+            (focal * T.SquareRoot(variance)).Store(figures.Rms, third);
+            ((focal * most) - (focal * least)).Store(figures.PeakToValley, third);
             (T shortShift, T longShift) = _glasses.EndsAreSamples
                 ? (shifts[0], shifts[^1])
-                : (focal * Shift(p1, p2, p3, order, row, third, _glasses.ShortChange), focal * Shift(p1, p2, p3, order, row, third, _glasses.LongChange));
-            (-0.5 * (shortShift + longShift)).Store(figures.SecondarySpectrum, third);
-            T.SquareRoot((rms * rms) + (floor * floor)).Store(figures.ExpectedRms, third);
+                : (Shift(p1, p2, p3, order, row, third, _glasses.ShortChange), Shift(p1, p2, p3, order, row, third, _glasses.LongChange));
+            (-0.5 * ((focal * shortShift) + (focal * longShift))).Store(figures.SecondarySpectrum, third);
+            (focal * T.SquareRoot(variance + unknown)).Store(figures.ExpectedRms, third);
         }
 
         [MethodImpl(MethodImplOptions.AggressiveInlining)]

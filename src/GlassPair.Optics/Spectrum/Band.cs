@@ -127,6 +127,20 @@ public sealed class Band : IEquatable<Band>
         return variance;
     }
 
+    /// <summary>Gets √w times the distance from the weighted mean, of one value for each sample: the dot product of two such lists is a weighted covariance.</summary>
+    /// <exception cref="ArgumentException">There are more or fewer values than samples.</exception>
+    public double[] DeviationsOf(ReadOnlySpan<double> values)
+    {
+        double mean = MeanOf(values);
+        double[] deviations = new double[values.Length];
+        for (int i = 0; i < values.Length; i++)
+        {
+            deviations[i] = Math.Sqrt(Samples[i].Weight) * (values[i] - mean);
+        }
+
+        return deviations;
+    }
+
     /// <inheritdoc/>
     public bool Equals(Band? other) =>
         other is not null && ShortEnd == other.ShortEnd && Design == other.Design && LongEnd == other.LongEnd && Samples.SequenceEqual(other.Samples);

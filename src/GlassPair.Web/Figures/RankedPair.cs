@@ -15,7 +15,7 @@ public sealed class RankedPair
     {
         (Solution, Candidate) = (solution, candidate);
         DataFloor = solution.DataFloor(quality);
-        Expected = Math.Sqrt((solution.RmsFocalShift * solution.RmsFocalShift) + (DataFloor * DataFloor));
+        Expected = solution.ExpectedRmsFocalShift(quality);
         PeakToValley = solution.PeakToValleyFocalShift;
         ColorLimitedFNumber = solution.ColorLimitedFNumber;
     }
