@@ -31,7 +31,7 @@ internal static partial class ResultsFile
             # {processor}
 
             Measured on {DateTime.UtcNow:yyyy-MM-dd} with `dotnet run -c Release --project tests/GlassPair.Benchmarks -- record`,
-            {Environment.Version}, {Environment.ProcessorCount} threads, shared with other work: ratios hold, times do not.
+            .NET {Environment.Version}, {Environment.ProcessorCount} threads, shared with other work: ratios hold, times do not.
 
             ## Every pair against plain numpy
 
