@@ -6,12 +6,16 @@ internal sealed class Latest : IDisposable
     private CancellationTokenSource _source = new();
 
     /// <summary>Ends the calls before and gives the token of the new one.</summary>
-    public CancellationToken Next()
+    /// <param name="until">Ends the new call as well.</param>
+    public CancellationToken Next(CancellationToken until = default)
     {
         Dispose();
-        _source = new CancellationTokenSource();
+        _source = CancellationTokenSource.CreateLinkedTokenSource(until);
         return _source.Token;
     }
+
+    /// <summary>Ends the calls before without a new one.</summary>
+    public void Stop() => _source.Cancel();
 
     /// <summary>Ends the calls before and waits; true where no newer call came meanwhile.</summary>
     public Task<bool> PauseAsync(TimeSpan pause) => PauseAsync(pause, Next());

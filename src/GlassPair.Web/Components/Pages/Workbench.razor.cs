@@ -22,6 +22,9 @@ public sealed partial class Workbench : ComponentBase
     private static readonly TimeSpan _rest = TimeSpan.FromMilliseconds(80);
     private static readonly TimeSpan _addressPause = TimeSpan.FromMilliseconds(400);
 
+    private readonly Latest _ranking = new();
+    private readonly Latest _addressing = new();
+    private readonly Latest _pointing = new();
     private WorkbenchState _state = WorkbenchState.Empty;
     private ImmutableArray<string> _misread = [];
     private bool _isDemo;
@@ -39,9 +42,6 @@ public sealed partial class Workbench : ComponentBase
     private ImmutableArray<WorkbenchRelaxation> _relaxations = [];
     private ImmutableArray<(string Sentence, long? Holding)> _costs = [];
     private string _shownQuery = "";
-    private CancellationTokenSource _work = new();
-    private CancellationTokenSource _addressWork = new();
-    private CancellationTokenSource _pointing = new();
 
     [Inject] private StockLibrary Library { get; set; } = null!;
 
@@ -140,11 +140,8 @@ public sealed partial class Workbench : ComponentBase
         Navigation.LocationChanged -= OnLocationChanged;
         Library.Changed -= OnStockChanged;
         Presence.Returned -= OnReturned;
-        _work.Cancel();
-        _work.Dispose();
-        _addressWork.Cancel();
-        _addressWork.Dispose();
-        _pointing.Cancel();
+        _ranking.Dispose();
+        _addressing.Dispose();
         _pointing.Dispose();
     }
 
@@ -223,9 +220,7 @@ public sealed partial class Workbench : ComponentBase
     /// <summary>Thickens the chord of a row where the pointer rests; rows that it only passes over cost nothing.</summary>
     private async Task PointAtAsync(Candidate? candidate)
     {
-        CancellationToken cancellation = Restart(ref _pointing);
-        await Task.Delay(_rest, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
-        if (!cancellation.IsCancellationRequested && !ReferenceEquals(_pointedAt, candidate))
+        if (await _pointing.PauseAsync(_rest) && !ReferenceEquals(_pointedAt, candidate))
         {
             _pointedAt = candidate;
             StateHasChanged();
@@ -242,9 +237,7 @@ public sealed partial class Workbench : ComponentBase
 
     private async Task ReplaceAddressAsync()
     {
-        CancellationToken cancellation = Restart(ref _addressWork);
-        await Task.Delay(_addressPause, cancellation).ConfigureAwait(ConfigureAwaitOptions.SuppressThrowing | ConfigureAwaitOptions.ContinueOnCapturedContext);
-        if (!cancellation.IsCancellationRequested)
+        if (await _addressing.PauseAsync(_addressPause))
         {
             Navigate(replace: true);
         }
@@ -252,7 +245,7 @@ public sealed partial class Workbench : ComponentBase
 
     private void Navigate(bool replace)
     {
-        _addressWork.Cancel();
+        _addressing.Stop();
         string query = WorkbenchAddress.Write(_state);
         if (query != _shownQuery)
         {
@@ -264,7 +257,7 @@ public sealed partial class Workbench : ComponentBase
     /// <summary>Ranks for the state, after a pause in which the next keystroke may come; the answer before it stays until then.</summary>
     private async Task AnswerAsync(TimeSpan pause)
     {
-        CancellationToken cancellation = Restart(ref _work);
+        CancellationToken cancellation = _ranking.Next(Presence.WhilePresent);
         if (_reading.Request is not { } request)
         {
             _stale = _answer is not null;
@@ -342,14 +335,6 @@ public sealed partial class Workbench : ComponentBase
         _chosen = (_state.Chosen is { } name ? _answer.Find(name, out _chosenProblem) : null) ?? _answer.Pairs.FirstOrDefault();
         _pinned = _state.Pinned is { } pin ? _answer.Find(pin, out _pinnedProblem) : null;
         _pointedAt = null;
-    }
-
-    private CancellationToken Restart(ref CancellationTokenSource source)
-    {
-        source.Cancel();
-        source.Dispose();
-        source = CancellationTokenSource.CreateLinkedTokenSource(Presence.WhilePresent);
-        return source.Token;
     }
 
     private sealed record Notice(string Kind, string Text, ImmutableArray<(string Text, string Href)> Links);
