@@ -15,7 +15,20 @@ public sealed class SmallControlTests : BunitContext
         input.Find("input").Input("1,5");
 
         Assert.Equal("1,5", typed);
-        Assert.Equal("240", input.Find("input").GetAttribute("value"));
+    }
+
+    [Fact]
+    public void NumberInput_DrawnLate_OverwritesNoKeystroke_UntilItsOwnerSaysSomethingNew()
+    {
+        var input = Render<NumberInput>(p => p.Add(i => i.Field, NumberField.FocalLength).Add(i => i.Value, "240"));
+        input.Find("input").Input("25");
+        Assert.Equal("25", input.Find("input").GetAttribute("value"));
+
+        input.Render(p => p.Add(i => i.Value, "240"));
+        Assert.Equal("25", input.Find("input").GetAttribute("value"));
+
+        input.Render(p => p.Add(i => i.Value, "300"));
+        Assert.Equal("300", input.Find("input").GetAttribute("value"));
     }
 
     [Fact]

@@ -65,7 +65,7 @@ public sealed class FitPageTests : GlassPagesTestBase
         Assert.Contains("Sellmeier formula of 2 terms", page.Find(".reading").TextContent, StringComparison.Ordinal);
         Assert.EndsWith("&form=sellmeier&terms=2&name=invented/example", Address, StringComparison.Ordinal);
         page.Find("#fit-form").Change("");
-        Assert.DoesNotContain("terms", Address, StringComparison.Ordinal);
+        page.WaitForAssertion(() => Assert.DoesNotContain("terms", Address, StringComparison.Ordinal));
     }
 
     [Theory]
